@@ -1,0 +1,31 @@
+/** Everything that can be done, one word for each. A verb names exactly one of these; unknown means no. */
+export const permissions = [
+  "practice.read",
+  "practice.manage",
+  "staff.manage",
+  "patients.read",
+  "patients.register",
+  "patients.edit",
+  "diary.read",
+  "diary.book",
+  "diary.cancel",
+  "diary.mark",
+  "clinical.read",
+  "clinical.write",
+  "clinical.sign",
+  "letters.read",
+  "letters.write",
+  "letters.sign",
+  "letters.send",
+  "billing.read",
+  "billing.draft",
+  "billing.issue",
+  "billing.take-payment",
+  "billing.refund",
+  "reports.read",
+  "messaging.read",
+  "audit.read",
+  "account.own",
+] as const;
+
+export type Permission = (typeof permissions)[number];

@@ -1,0 +1,26 @@
+/**
+ * How names are compared: accents, case, hyphens and apostrophes forgiven, so that "Łukaszewska", "lukaszewska"
+ * and "LUKASZEWSKA" are one. The database keeps this form beside the name for prefix search.
+ */
+export function foldName(text: string): string {
+  return text
+    .normalize("NFD")
+    .replace(/\p{M}+/gu, "")
+    .toLowerCase()
+    .replace(/[łđøßæœðþı]/g, (c) => folded[c] ?? c)
+    .replace(/['’`]/g, "")
+    .replace(/[^\p{L}\p{N}]+/gu, " ")
+    .trim();
+}
+
+const folded: Record<string, string> = {
+  ł: "l",
+  đ: "d",
+  ø: "o",
+  ß: "ss",
+  æ: "ae",
+  œ: "oe",
+  ð: "d",
+  þ: "th",
+  ı: "i",
+};

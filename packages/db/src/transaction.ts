@@ -1,0 +1,25 @@
+import type { Database } from "./client";
+import { databaseErrno, unwrapDatabaseError } from "./database-error";
+
+const deadlock = 1213;
+const lockWait = 1205;
+const tries = 5;
+
+/**
+ * Runs the work in one READ COMMITTED transaction. A deadlock or a lock wait rolls back and runs the whole
+ * function again, up to five times with jitter: MariaDB answers either for unrelated bookings too, and a cluster
+ * answers a conflict as a deadlock at commit.
+ */
+export async function runInTransaction<T>(db: Database, work: (tx: Database) => Promise<T>): Promise<T> {
+  for (let attempt = 1; ; attempt += 1) {
+    try {
+      return await db.transaction((tx) => work(tx as unknown as Database), {
+        isolationLevel: "read committed",
+      });
+    } catch (error) {
+      const errno = databaseErrno(error);
+      if ((errno !== deadlock && errno !== lockWait) || attempt === tries) throw unwrapDatabaseError(error);
+      await new Promise((resolve) => setTimeout(resolve, Math.random() * 15 * 2 ** attempt));
+    }
+  }
+}
