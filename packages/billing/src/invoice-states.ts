@@ -1,4 +1,4 @@
-import { type InvoiceSums, keptPence, owedPence } from "./invoice-balance";
+import { type InvoiceSums, owedPence } from "./invoice-balance";
 
 export const invoiceStates = ["draft", "issued", "part-paid", "paid", "void", "refunded"] as const;
 export type InvoiceState = (typeof invoiceStates)[number];
@@ -30,7 +30,6 @@ export const owingStates: readonly InvoiceState[] = ["issued", "part-paid"];
 
 /** The state that an issued invoice's sums put it in. An invoice for nothing is paid as soon as it is issued. */
 export function stateOfSums(sums: InvoiceSums): InvoiceState {
-  const kept = keptPence(sums);
-  if (owedPence(sums) > 0) return kept > 0 ? "part-paid" : "issued";
-  return kept === 0 && sums.refundedPence > 0 ? "refunded" : "paid";
+  if (owedPence(sums) > 0) return sums.paidPence > 0 ? "part-paid" : "issued";
+  return sums.paidPence === 0 && sums.creditedPence > 0 ? "refunded" : "paid";
 }

@@ -21,6 +21,14 @@ export interface VatRounding {
   readonly rounding: Rounding;
 }
 
+export const vatRoundings = {
+  "line-nearest": { per: "line", rounding: "nearest" },
+  "line-down": { per: "line", rounding: "down" },
+  "invoice-nearest": { per: "invoice", rounding: "nearest" },
+  "invoice-down": { per: "invoice", rounding: "down" },
+} as const satisfies Record<string, VatRounding>;
+export type VatRoundingCode = keyof typeof vatRoundings;
+
 export const usualVatRounding: VatRounding = { per: "line", rounding: "nearest" };
 
 export interface TotalsLine {

@@ -4,18 +4,17 @@ import { choosePrice, type Price } from "./prices";
 
 const price = (id: string, more: Partial<Price> = {}): Price => ({
   id,
-  serviceId: "follow-up",
+  itemId: "follow-up",
   siteId: null,
   payerId: null,
   validFrom: "2026-01-01",
   validUntil: null,
   amountPence: 6200,
-  isVatInclusive: false,
   vatTreatment: "exempt",
   ...more,
 });
 
-const wish = { serviceId: "follow-up", siteId: "saltgate", payerId: "samphire", on: "2026-11-10" };
+const wish = { itemId: "follow-up", siteId: "saltgate", payerId: "samphire", on: "2026-11-10" };
 
 describe("choosing a price", () => {
   const list = [
@@ -24,7 +23,7 @@ describe("choosing a price", () => {
     price("payer", { payerId: "samphire" }),
     price("payer at site", { payerId: "samphire", siteId: "saltgate" }),
     price("elsewhere", { siteId: "tollhouse" }),
-    price("other service", { serviceId: "initial", payerId: "samphire", siteId: "saltgate" }),
+    price("other service", { itemId: "initial", payerId: "samphire", siteId: "saltgate" }),
   ];
 
   it.each([
@@ -32,7 +31,7 @@ describe("choosing a price", () => {
     [{ ...wish, siteId: "wharf" }, "payer"],
     [{ ...wish, payerId: null }, "site"],
     [{ ...wish, payerId: "halyard", siteId: "wharf" }, "general"],
-    [{ ...wish, serviceId: "massage" }, null],
+    [{ ...wish, itemId: "massage" }, null],
   ])("%o takes %s", (asked, id) => {
     expect(choosePrice(list, asked)?.id ?? null).toBe(id);
   });

@@ -5,19 +5,20 @@ import type { VatTreatment } from "./vat";
 /** One row of the price list. A null site or payer means any. */
 export interface Price {
   readonly id: string;
-  readonly serviceId: string;
+  /** The service or the product that is priced. */
+  readonly itemId: string;
   readonly siteId: string | null;
   readonly payerId: string | null;
   readonly validFrom: PlainDateText;
   /** The last day on which it holds; null while it still does. */
   readonly validUntil: PlainDateText | null;
+  /** Without VAT. */
   readonly amountPence: Pence;
-  readonly isVatInclusive: boolean;
   readonly vatTreatment: VatTreatment;
 }
 
 export interface PriceWish {
-  readonly serviceId: string;
+  readonly itemId: string;
   readonly siteId: string;
   readonly payerId: string | null;
   /** The day of the visit, not of the invoice. */
@@ -25,7 +26,7 @@ export interface PriceWish {
 }
 
 const fits = (price: Price, wish: PriceWish): boolean =>
-  price.serviceId === wish.serviceId &&
+  price.itemId === wish.itemId &&
   (price.siteId === null || price.siteId === wish.siteId) &&
   (price.payerId === null || price.payerId === wish.payerId) &&
   price.validFrom <= wish.on &&

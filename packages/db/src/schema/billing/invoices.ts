@@ -43,8 +43,12 @@ export const invoices = mysqlTable(
     netPence: pence("net_pence").notNull().default(0),
     vatPence: pence("vat_pence").notNull().default(0),
     totalPence: pence("total_pence").notNull().default(0),
-    /** Money received and not given back. CHECK: between nothing and the total. */
+    /** Money received and not given back. */
     paidPence: pence("paid_pence").notNull().default(0),
+    /** The part of the total that is no longer asked for, since its money was given back for good. */
+    creditedPence: pence("credited_pence").notNull().default(0),
+    /** Held by open card payments. CHECK: paid, credited and pending together are never above the total. */
+    pendingPence: pence("pending_pence").notNull().default(0),
     vatRounding: varchar("vat_rounding", { length: 20 }).notNull(),
     /** As printed: null where the practice is not registered. */
     vatNumber: varchar("vat_number", { length: 20 }),

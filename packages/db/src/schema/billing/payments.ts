@@ -1,4 +1,5 @@
 import {
+  boolean,
   foreignKey,
   index,
   json,
@@ -54,6 +55,9 @@ export const refunds = mysqlTable(
     invoiceId: uuid("invoice_id").notNull(),
     amountPence: pence("amount_pence").notNull(),
     reason: varchar("reason", { length: 200 }).notNull(),
+    method: varchar("method", { length: 10 }).$type<"cash" | "card" | "terminal" | "bank">().notNull(),
+    /** The invoice is owed again by this much, as after a payment taken by mistake; otherwise it is forgiven. */
+    isOwedAgain: boolean("is_owed_again").notNull().default(false),
     /** "asked" from before the card service is called until it has answered. Cash is "done" at once. */
     state: varchar("state", { length: 8 }).$type<"asked" | "done" | "failed">().notNull(),
     cardReference: varchar("card_reference", { length: 80 }),
