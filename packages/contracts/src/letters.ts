@@ -33,12 +33,12 @@ export const letterHeadings: Record<LetterSectionKey, string> = {
   allergies: "Allergies and adverse reactions",
 };
 
-export const letterSourceKinds = ["episode", "referral", "note", "measure", "visits", "programme", "log", "patient", "typed"] as const;
+export const letterSourceKinds = ["episode", "note", "measure", "visits", "programme", "patient"] as const;
 
 export const letterSource = z.strictObject({
   kind: z.enum(letterSourceKinds),
-  /** The row that the sentence was made from; null for what a person typed. */
-  id: z.uuid().nullable(),
+  /** The row that the sentence was made from. */
+  id: z.uuid(),
   /** What the margin says: "Assessment, 6 Oct". */
   label: z.string().max(80),
 });
@@ -50,10 +50,11 @@ export type LetterActor = (typeof letterActors)[number];
 
 export const letterSentence = z.strictObject({
   /** Says the same thing about the same fact in every version of the letter: "scales:pain". */
-  key: z.string().min(1).max(120),
-  text: z.string().trim().max(2000, "Keep one sentence under 2,000 characters."),
-  source: letterSource,
-  /** What the record said when the sentence was made; null for what a person typed. */
+  id: z.string().min(1).max(120),
+  text: z.string().trim().max(2000, "Keep each sentence under 2,000 characters."),
+  /** Null for what a person typed. */
+  source: letterSource.nullable(),
+  /** What the record said when the sentence was last made from it; null for what a person typed. */
   assembled: z.string().max(2000).nullable(),
   /** Only in the plan. */
   actor: z.enum(letterActors).nullable(),
@@ -62,13 +63,14 @@ export type LetterSentence = z.infer<typeof letterSentence>;
 
 export const letterSection = z.strictObject({
   key: z.enum(letterSectionKeys),
+  heading: z.string().max(120),
   sentences: z.array(letterSentence).max(60),
 });
 export type LetterSection = z.infer<typeof letterSection>;
 
-/** What the screen shows beside a sentence whose source has changed since. */
+/** A sentence whose source has changed since it was written. */
 export interface StaleSentence {
-  readonly key: string;
+  readonly id: string;
   /** What the record says now; null where it no longer says anything about this. */
   readonly now: string | null;
   readonly source: LetterSource | null;

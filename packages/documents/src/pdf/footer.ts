@@ -18,13 +18,14 @@ export function drawFooters(pdf: Pdf, footer: Footer): void {
     pdf.doc.switchToPage(index);
     pdf.pen.rule(y - 5, { color: ink.rule, weight: 0.5 });
     pdf.pen.decoration(() => {
-      const left = pdf.pen.lines(footer.reference, style, width * 0.75)[0];
-      const right = pdf.pen.lines(`Page ${index - start + 1} of ${count}`, style, width * 0.25)[0];
-      if (left) pdf.pen.line(left, style, page.left, y, width * 0.75);
-      if (right) pdf.pen.line(right, style, page.left + width * 0.75, y, width * 0.25, "right");
-      const notice = pdf.pen.lines(footer.confidentiality, style, width).slice(0, 2);
-      for (const [row, line] of notice.entries())
-        pdf.pen.line(line, style, page.left, y + style.leading * (row + 1), width);
+      const right = pdf.pen.lines(`Page ${index - start + 1} of ${count}`, style, width * 0.2)[0];
+      if (right) pdf.pen.line(right, style, page.left + width * 0.8, y, width * 0.2, "right");
+      // Never cut short: half of an identifier is worse than none.
+      const reference = pdf.pen.lines(footer.reference, style, width * 0.8);
+      const notice = pdf.pen.lines(footer.confidentiality, style, width);
+      for (const [row, line] of [...reference, ...notice].entries()) {
+        pdf.pen.line(line, style, page.left, y + style.leading * row, width);
+      }
     }, "Pagination");
   }
 }

@@ -25,7 +25,10 @@ export interface LetterSentence {
   text: string;
   /** The row it was written from; null where a person wrote it. */
   source: { kind: string; id: string; label: string } | null;
-  isEdited: boolean;
+  /** What the record said when the sentence was last made from it; a difference shows an edit or a stale fact. */
+  assembled: string | null;
+  /** Who an action of the plan is for. */
+  actor: string | null;
 }
 
 export interface LetterSection {

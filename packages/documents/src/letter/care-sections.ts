@@ -1,0 +1,123 @@
+import type { LetterSentence, LetterSource } from "@withy/contracts/letters";
+import { plainDateWords, shortDate } from "@withy/core/date-words";
+import type { DischargeFacts, NotedText, ProgrammeFact } from "./discharge-facts";
+import { assembled, capital, listWords, noteSource, numberWord } from "./wording";
+
+export function attendance(facts: DischargeFacts): LetterSentence[] {
+  const { attended, missed, firstOn, lastOn } = facts.visits;
+  const source: LetterSource = { kind: "visits", id: facts.episode.id, label: "Visits" };
+  const visits = `${capital(numberWord(attended))} ${attended === 1 ? "visit was" : "visits were"} attended`;
+  const span =
+    firstOn === null || lastOn === null
+      ? ""
+      : firstOn === lastOn
+        ? `, on ${plainDateWords(firstOn)}`
+        : `, from ${plainDateWords(firstOn)} to ${plainDateWords(lastOn)}`;
+  const sentences = [assembled("attendance", "attended", `${visits}${span}`, source)];
+  if (missed > 0) {
+    const text = `${capital(numberWord(missed))} ${missed === 1 ? "visit was" : "visits were"} missed without notice`;
+    sentences.push(assembled("attendance", "missed", text, source));
+  }
+  return sentences;
+}
+
+/** The same words in two notes are said once, with the first note as their source. */
+function withoutRepeats(notes: readonly NotedText[]): NotedText[] {
+  const seen = new Set<string>();
+  return notes.filter(({ text }) => {
+    const plain = text.trim().toLowerCase();
+    if (plain === "" || seen.has(plain)) return false;
+    seen.add(plain);
+    return true;
+  });
+}
+
+export function summary(facts: DischargeFacts): LetterSentence[] {
+  return withoutRepeats(facts.treatments).map((note) =>
+    assembled(
+      "summary",
+      note.noteId,
+      `Treatment on ${plainDateWords(note.on)}: ${note.text}`,
+      noteSource(note, facts.today),
+    ),
+  );
+}
+
+function programmeWords(programme: ProgrammeFact): string {
+  const { exercises, rounds, sessionSeconds, daysPerWeek } = programme;
+  const minutes = Math.round(sessionSeconds / 60);
+  const parts = [
+    `Home programme of ${numberWord(exercises.length)} ${exercises.length === 1 ? "exercise" : "exercises"}`,
+    rounds > 1 ? `${numberWord(rounds)} rounds` : "",
+    `about ${minutes} ${minutes === 1 ? "minute" : "minutes"} a session`,
+    daysPerWeek === null ? "" : `on ${numberWord(daysPerWeek)} ${daysPerWeek === 1 ? "day" : "days"} a week`,
+  ];
+  return `${parts.filter((part) => part !== "").join(", ")}: ${listWords(exercises)}`;
+}
+
+export function advice(facts: DischargeFacts): LetterSentence[] {
+  const { programme } = facts;
+  const said = withoutRepeats(facts.advice).map((note) =>
+    assembled("advice", note.noteId, note.text, noteSource(note, facts.today)),
+  );
+  if (!programme || programme.exercises.length === 0) return said;
+  const label = `Programme, ${shortDate(programme.on, facts.today)}`;
+  const source: LetterSource = { kind: "programme", id: programme.programmeId, label };
+  return [assembled("advice", "programme", programmeWords(programme), source), ...said];
+}
+
+/** What was decided, then one action for each: doctor and patient are never left to guess which is theirs. */
+export function plan(facts: DischargeFacts): LetterSentence[] {
+  const source: LetterSource = { kind: "episode", id: facts.episode.id, label: "Episode" };
+  const isAlerted = facts.episode.redFlags.present.length > 0;
+  const sentences = [
+    assembled(
+      "plan",
+      "discharge",
+      "Discharged from physiotherapy; no further visit is booked for this problem",
+      source,
+      "practice",
+    ),
+  ];
+  if (facts.plan && facts.plan.text.trim() !== "") {
+    sentences.push(
+      assembled("plan", "noted", facts.plan.text, noteSource(facts.plan, facts.today), "practice"),
+    );
+  }
+  sentences.push(
+    assembled(
+      "plan",
+      "gp",
+      isAlerted ? "Please review the warning signs under Safety alerts" : "No action is asked of you",
+      source,
+      "gp",
+    ),
+  );
+  if (facts.programme) {
+    const { programmeId, on, daysPerWeek } = facts.programme;
+    const often =
+      daysPerWeek === null
+        ? ""
+        : ` on ${numberWord(daysPerWeek)} ${daysPerWeek === 1 ? "day" : "days"} a week`;
+    const label = `Programme, ${shortDate(on, facts.today)}`;
+    sentences.push(
+      assembled(
+        "plan",
+        "patient-programme",
+        `Keep up the home programme${often}`,
+        { kind: "programme", id: programmeId, label },
+        "patient",
+      ),
+    );
+  }
+  sentences.push(
+    assembled(
+      "plan",
+      "patient-return",
+      "Contact us or the GP if the problem comes back or gets worse",
+      source,
+      "patient",
+    ),
+  );
+  return sentences;
+}
