@@ -1,0 +1,4 @@
+export * from "./diary/appointment";
+export * from "./diary/day";
+export * from "./diary/finding";
+export * from "./diary/today";
