@@ -1,0 +1,25 @@
+import { SectionHead } from "@withy/ui/section-head";
+import type { ReactNode } from "react";
+
+/** One part of the style sheet with its margin note. */
+export function Section({
+  title,
+  note,
+  aside,
+  children,
+}: {
+  title: string;
+  note: string;
+  aside?: string;
+  children: ReactNode;
+}) {
+  return (
+    <section className="guide-section" aria-label={title}>
+      <p className="note gut">{note}</p>
+      <div>
+        <SectionHead title={title} aside={aside} />
+        <div className="guide-body">{children}</div>
+      </div>
+    </section>
+  );
+}
