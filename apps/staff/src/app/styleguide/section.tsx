@@ -14,12 +14,12 @@ export function Section({
   children: ReactNode;
 }) {
   return (
-    <section className="guide-section" aria-label={title}>
+    <div className="guide-section">
       <p className="note gut">{note}</p>
       <div>
         <SectionHead title={title} aside={aside} />
         <div className="guide-body">{children}</div>
       </div>
-    </section>
+    </div>
   );
 }

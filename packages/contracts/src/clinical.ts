@@ -1,0 +1,3 @@
+export * from "./clinical/episodes";
+export * from "./clinical/measures";
+export * from "./clinical/notes";

@@ -1,0 +1,1 @@
+export { type AuditEntry, recordAudit } from "./record-audit";

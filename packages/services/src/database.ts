@@ -1,0 +1,1 @@
+export { type Connection, connect, type Database } from "@withy/db/client";

@@ -1,0 +1,2 @@
+export { checkHealth, type Health } from "./check-health";
+export { enqueueMessage, type OutgoingMessage } from "./enqueue-message";
