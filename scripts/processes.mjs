@@ -7,7 +7,13 @@ import { StartError } from "./progress.mjs";
 export const pause = (ms) => new Promise((done) => setTimeout(done, ms));
 export const lastLines = (text, count = 30) => text.trimEnd().split("\n").slice(-count).join("\n");
 
-/** Runs a command to its end and gives its output; with `show`, the output goes straight to the screen. */
+/**
+ * Runs a command to its end and gives its output; with `show`, the output goes straight to the screen.
+ * @param {string} command
+ * @param {string[]} args
+ * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, input?: string, show?: boolean, failure?: string }} options
+ * @returns {Promise<string>}
+ */
 export function run(command, args, { cwd, env, input, show = false, failure } = {}) {
   return new Promise((resolve, reject) => {
     const stdio = show ? ["ignore", "inherit", "inherit"] : ["pipe", "pipe", "pipe"];

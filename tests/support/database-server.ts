@@ -21,6 +21,9 @@ declare module "vitest" {
 const passwords = { appPassword: "test-app", migratePassword: "test-migrate" };
 const templates = join(root, "node_modules/.cache/withy-test-database");
 
+/** Holds no table: for the replay of the migrations. */
+export const emptyDatabase = "withy_test_empty";
+
 const databaseNames = (count: number) => Array.from({ length: count }, (_, i) => `withy_test_${i + 1}`);
 
 /** In memory where the machine offers it. */
@@ -37,7 +40,7 @@ function templateDigest(count: number): string {
       .filter((name) => /\.(sql|json|ts)$/.test(name) && !name.startsWith("seed"))
       .map((name) => join(folder, name)),
   );
-  for (const file of [...files.sort(), "scripts/database.mjs"])
+  for (const file of [...files.sort(), "scripts/database.mjs", "tests/support/database-server.ts"])
     hash.update(file).update(readFileSync(join(root, file)));
   return hash.digest("hex").slice(0, 16);
 }
@@ -65,7 +68,7 @@ async function prepareTemplate(count: number): Promise<string> {
     await createDataFolder(join(dir, "db"));
     const { port, server } = await startFast(join(dir, "db"));
     try {
-      await createDatabases(server, databaseNames(count), passwords);
+      await createDatabases(server, [...databaseNames(count), emptyDatabase], passwords);
       for (const name of databaseNames(count)) {
         const failure = "The test database could not be migrated.";
         await runTypeScript("packages/db", "src/migrate.ts", {

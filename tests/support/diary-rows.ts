@@ -1,6 +1,7 @@
 import { newId } from "@withy/core/ids";
 import { addMinutes, instantAt } from "@withy/core/zoned-time";
 import { type AppointmentStateCode, appointments, diaryClaims } from "@withy/db/schema";
+import { stateFacts } from "@withy/diary/appointment-states";
 import type { TestPractice } from "./practice";
 
 export interface TestVisit {
@@ -14,8 +15,6 @@ export interface TestVisit {
 
 /** Columns to set otherwise than usual. */
 export type VisitValues = Partial<Omit<typeof appointments.$inferSelect, "practiceId" | "id">>;
-
-const freed = new Set<AppointmentStateCode>(["cancelled", "noshow"]);
 
 /** Puts a visit into the diary without asking any rule: with the therapist in room 1 at Saltgate unless told otherwise. */
 export async function addAppointment(
@@ -44,7 +43,8 @@ export async function addAppointment(
     ...values,
   };
   await practice.db.insert(appointments).values(appointment);
-  if (!freed.has(appointment.state)) await practice.db.insert(diaryClaims).values(claimsOf(appointment));
+  if (stateFacts[appointment.state].holdsTime)
+    await practice.db.insert(diaryClaims).values(claimsOf(appointment));
   return appointment;
 }
 
