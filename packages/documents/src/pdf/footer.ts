@@ -1,5 +1,5 @@
-import type { Pdf } from "./document";
 import { ink, page, textStyles } from "./page-style";
+import type { Pdf } from "./pdf";
 
 export interface Footer {
   /** Who may read it, for example "Confidential: for the person it is addressed to". Empty for none. */

@@ -1,5 +1,5 @@
-import type { Pdf } from "./document";
 import { ink, mm, page, textStyles } from "./page-style";
+import type { Pdf } from "./pdf";
 import { paragraph } from "./text";
 
 export interface Sender {

@@ -1,6 +1,6 @@
 import type { Line } from "./break-lines";
-import type { Pdf } from "./document";
 import { ink, page, type TextStyle, textStyles } from "./page-style";
+import type { Pdf } from "./pdf";
 import type { Align, Text } from "./pen";
 
 export interface Column {

@@ -1,5 +1,5 @@
-import type { Pdf } from "./document";
 import { ink, type TextStyle, textStyles } from "./page-style";
+import type { Pdf } from "./pdf";
 import type { Align, Text } from "./pen";
 
 /** The document's title (level 1) or a heading below it, kept together with at least two lines of what follows. */
