@@ -41,4 +41,5 @@ if (process.argv[1] === fileURLToPath(import.meta.url)) {
   const url = process.env["WITHY_MIGRATE_URL"];
   if (!url) throw new Error("Set WITHY_MIGRATE_URL to the address of the migrating user.");
   await migrateDatabase(url);
+  console.log(`The database ${new URL(url).pathname.slice(1)} is up to date.`);
 }

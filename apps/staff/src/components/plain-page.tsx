@@ -12,16 +12,19 @@ export function PlainPage({
   children: ReactNode;
 }) {
   return (
-    <main className="cover" id="main">
-      <a className="covermark" href="/" aria-label="Withy, to the start">
+    <div className="cover">
+      <div className="covermark" aria-hidden="true">
         <Mark />
-        <span>Withy</span>
-      </a>
-      <div className="coversheet">
+      </div>
+      <main className="coversheet" id="main">
+        <p className="covername">
+          <a href="/">Withy</a>
+        </p>
+        <p className="coversub">The day's book of your clinics</p>
         <h1>{title}</h1>
         {lead && <p className="soft">{lead}</p>}
         {children}
-      </div>
-    </main>
+      </main>
+    </div>
   );
 }

@@ -20,7 +20,7 @@ export default async function SignInPage({ searchParams }: PageProps<"/sign-in">
       }
     >
       <SignInForm from={from} />
-      <p className="small">
+      <p>
         <a href="/forgot">I forgot my password</a>
       </p>
     </PlainPage>
