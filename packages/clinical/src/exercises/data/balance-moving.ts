@@ -1,0 +1,120 @@
+import { exercise, form } from "../define";
+import { balanceDose } from "../dose-ranges";
+import type { Exercise } from "../exercise";
+import { pose, prop, side, stand } from "../pose";
+
+const stepOver = pose(stand, {
+  hip: [60, -8],
+  knee: [60, 4],
+  ankle: [0, -4],
+  shoulder: [10, 20],
+  elbow: [30, 30],
+  fixed: "far-ankle",
+});
+const walkLine = pose(stand, {
+  hip: [14, -14],
+  knee: [0, 4],
+  ankle: [-12, -14],
+  shoulder: [-14, 18],
+  elbow: [8, 20],
+  x: 62,
+});
+
+export const balanceMoving: readonly Exercise[] = [
+  exercise({
+    key: "clock-reach",
+    name: "Clock reach",
+    region: "balance",
+    kinds: ["balance", "strength"],
+    purpose: "Controls the standing leg while the other moves in all directions.",
+    start: "Stand on one leg in the middle of an imagined clock face.",
+    steps: [
+      "Touch twelve with the free foot and come back.",
+      "Go round the clock, a number at a time.",
+      "Bend the standing knee as you reach.",
+    ],
+    cautions: ["Keep something firm within reach.", "Skip the numbers that hurt."],
+    sides: "one-at-a-time",
+    muscles: ["ankle", "thigh", "outer hip"],
+    place: "open-floor",
+    dose: balanceDose,
+    figure: side(
+      stand,
+      pose(stand, {
+        trunk: 12,
+        hip: [44, 40],
+        knee: [6, 50],
+        ankle: [-20, 16],
+        shoulder: [30, 30],
+        elbow: [20, 20],
+        fixed: "far-ankle",
+      }),
+      "near-ankle",
+    ),
+    standard: "three-points",
+    leadsTo: null,
+    forms: [
+      form("slide", 4, "slide the foot", "Slide the foot on the floor to twelve, three and six."),
+      form("three-points", 5, "touch three numbers", "Touch twelve, three and six."),
+      form("all", 6, "touch all the numbers", "Touch every number you can reach."),
+      form("no-touch", 8, "hover, do not touch", "Hover over the numbers without touching."),
+    ],
+  }),
+  exercise({
+    key: "heel-to-toe-walk",
+    name: "Heel to toe walk",
+    region: "balance",
+    kinds: ["balance"],
+    purpose: "Steadiness in motion, on a narrow path.",
+    start: "Stand at the end of a worktop or a corridor.",
+    steps: [
+      "Put one heel right in front of the other toes.",
+      "Shift your weight, then bring the next foot.",
+      "Look ahead, not at your feet.",
+    ],
+    cautions: ["Walk beside something you can touch.", "Clear the floor of rugs and leads."],
+    sides: "together",
+    muscles: ["ankles", "hips"],
+    place: "worktop",
+    supports: ["worktop", "rail", "helper"],
+    dose: balanceDose,
+    figure: side(
+      walkLine,
+      pose(walkLine, { hip: [-14, 14], knee: [4, 0], ankle: [-14, -12], fixed: "near-ankle", x: 62 }),
+      "far-ankle",
+      prop("worktop", 92),
+    ),
+    standard: "forward",
+    leadsTo: null,
+    forms: [
+      form("wide", 2, "feet a little apart", "Leave a hand's width between heel and toes."),
+      form("forward", 4, "heel touches toe", "Heel touches toe at each step."),
+      form("backward", 5, "backward", "Do it backward, toe to heel."),
+      form("tray", 6, "while you count back", "Count back in sevens while you walk."),
+    ],
+  }),
+  exercise({
+    key: "step-over",
+    name: "Step over",
+    region: "balance",
+    kinds: ["balance", "strength"],
+    purpose: "Practises lifting the foot clear, which prevents trips.",
+    start: "Stand beside a worktop with a rolled towel on the floor in front of you.",
+    steps: ["Lift one knee and step over.", "Bring the other foot after it.", "Step back the same way."],
+    cautions: ["Hold on until it feels easy.", "Use something soft that you cannot trip over."],
+    sides: "together",
+    muscles: ["front of the hips", "ankles"],
+    place: "worktop",
+    supports: ["worktop", "rail", "helper"],
+    dose: balanceDose,
+    figure: side(pose(stand, { x: 44 }), pose(stepOver, { x: 44 }), "near-ankle", prop("cushion", 58)),
+    standard: "towel",
+    withoutEquipment: { exercise: "step-over", form: "line" },
+    leadsTo: "step-up",
+    forms: [
+      form("line", 1, "over a line", "Step over a line on the floor, lifting as if it were a box."),
+      form("towel", 2, "over a rolled towel", "Step over a rolled towel.", ["towel"]),
+      form("cushion", 3, "over a cushion", "Step over a cushion.", ["cushion"]),
+    ],
+  }),
+];

@@ -1,0 +1,146 @@
+import { exercise, form } from "../define";
+import { balanceDose, strengthDose, stretchDose } from "../dose-ranges";
+import type { Exercise } from "../exercise";
+import { pose, prop, side, stand } from "../pose";
+
+const atWorktop = pose(stand, { shoulder: [54, 54], elbow: [26, 26] });
+
+export const calf: readonly Exercise[] = [
+  exercise({
+    key: "heel-raise",
+    name: "Heel raise",
+    region: "ankle",
+    kinds: ["strength"],
+    purpose: "Strengthens the calf, the spring of every step, and loads its tendon.",
+    start: "Stand tall at a worktop, feet under your hips.",
+    steps: [
+      "Rise on to the balls of both feet.",
+      "Press through the big toe, ankles straight.",
+      "Lower over three counts.",
+    ],
+    cautions: [
+      "A tendon that is worse next morning wants less.",
+      "Sudden sharp calf pain: stop and ring us.",
+    ],
+    sides: "together",
+    muscles: ["calf"],
+    place: "worktop",
+    dose: strengthDose,
+    figure: side(
+      atWorktop,
+      pose(atWorktop, { ankle: [-42, -42], fixed: "near-toe", x: 62 }),
+      "near-ankle",
+      prop("worktop", 86),
+    ),
+    standard: "two-feet",
+    withoutEquipment: { exercise: "heel-raise", form: "one-foot" },
+    leadsTo: null,
+    forms: [
+      form("sitting", 1, "sitting", "Sit on a chair and raise both heels.", ["chair"]),
+      form("two-feet", 3, "two feet, slow down", "Use both feet and lower slowly."),
+      form("one-down", 4, "up on two, down on one", "Rise on both feet and lower on one."),
+      form("one-foot", 6, "one foot", "Do it on one foot. Change feet half way."),
+      form(
+        "step-edge",
+        7,
+        "over the edge of a step",
+        "Stand on the edge of a step and let the heel sink below it.",
+        ["step"],
+      ),
+    ],
+  }),
+  exercise({
+    key: "calf-stretch",
+    name: "Calf stretch",
+    region: "ankle",
+    kinds: ["mobility"],
+    purpose: "Lets the shin come further over the foot, for stairs and squats.",
+    start: "Stand facing a wall in a stride, hands on the wall.",
+    steps: [
+      "Keep the back heel down and the toes forward.",
+      "Lean in until the calf feels long.",
+      "Hold, then bend the back knee for the deeper part.",
+    ],
+    cautions: ["A pinch at the front of the ankle is not a stretch.", "Do not bounce."],
+    sides: "one-at-a-time",
+    muscles: ["calf"],
+    place: "wall",
+    supports: ["wall"],
+    dose: stretchDose,
+    figure: side(
+      pose(stand, {
+        trunk: 6,
+        hip: [28, -16],
+        knee: [16, 0],
+        ankle: [6, 20],
+        shoulder: [80, 80],
+        elbow: [10, 10],
+        fixed: "far-ankle",
+        x: 30,
+      }),
+      pose(stand, {
+        trunk: 16,
+        hip: [54, -14],
+        knee: [50, 0],
+        ankle: [12, 32],
+        shoulder: [84, 84],
+        elbow: [30, 30],
+        fixed: "far-ankle",
+        x: 30,
+      }),
+      "pelvis",
+      prop("wall", 96),
+    ),
+    standard: "straight",
+    withoutEquipment: { exercise: "calf-stretch", form: "bent" },
+    leadsTo: null,
+    forms: [
+      form("towel", 1, "sitting, with a towel", "Sit with the leg long and pull the foot with a towel.", [
+        "towel",
+      ]),
+      form("straight", 2, "back knee straight", "Keep the back knee straight."),
+      form("bent", 3, "back knee bent", "Bend the back knee with the heel down."),
+      form("step", 4, "heel over a step", "Let the heel sink over the edge of a step.", ["step"]),
+    ],
+  }),
+  exercise({
+    key: "hop",
+    name: "Small hops",
+    region: "ankle",
+    kinds: ["strength", "balance"],
+    purpose: "Brings back the spring of the calf for running and sport.",
+    start: "Stand tall, knees soft.",
+    steps: [
+      "Push off the balls of your feet.",
+      "Land softly and quietly.",
+      "Let one landing become the next jump.",
+    ],
+    cautions: [
+      "Only when twenty heel raises on one foot are easy.",
+      "Not with bone thinning or a recent stress injury.",
+    ],
+    sides: "together",
+    muscles: ["calf", "thighs"],
+    place: "open-floor",
+    dose: balanceDose,
+    figure: side(
+      pose(stand, { trunk: 10, hip: [34, 34], knee: [44, 44], ankle: [18, 18], shoulder: [-10, -10] }),
+      pose(stand, {
+        ankle: [-44, -44],
+        shoulder: [30, 30],
+        elbow: [40, 40],
+        fixed: "near-toe",
+        x: 60,
+        height: 8,
+      }),
+      "head",
+    ),
+    standard: "two-feet",
+    leadsTo: null,
+    forms: [
+      form("bounce", 5, "bounce without leaving the floor", "Bounce the heels without leaving the floor."),
+      form("two-feet", 7, "two feet", "Hop on two feet."),
+      form("one-foot", 9, "one foot", "Hop on one foot. Change feet half way."),
+    ],
+  }),
+];

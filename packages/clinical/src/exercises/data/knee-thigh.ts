@@ -1,0 +1,137 @@
+import { exercise, form } from "../define";
+import { strengthDose, stretchDose } from "../dose-ranges";
+import type { Exercise } from "../exercise";
+import { crookLying, pose, prop, side, stand } from "../pose";
+
+export const kneeThigh: readonly Exercise[] = [
+  exercise({
+    key: "heel-to-buttock",
+    name: "Standing heel lift behind",
+    region: "knee",
+    kinds: ["strength"],
+    purpose: "Strengthens the back of the thigh, which brakes the leg in walking.",
+    start: "Stand tall facing a worktop, thighs side by side.",
+    steps: [
+      "Bend one knee and bring the heel up behind you.",
+      "Keep the thighs level with each other.",
+      "Lower slowly.",
+    ],
+    cautions: ["Cramp means: less high and slower.", "Do not arch the back."],
+    sides: "one-at-a-time",
+    muscles: ["back of the thigh"],
+    place: "worktop",
+    dose: strengthDose,
+    figure: side(
+      pose(stand, { shoulder: [50, 50], elbow: [40, 40] }),
+      pose(stand, {
+        knee: [92, 0],
+        ankle: [-10, 0],
+        shoulder: [50, 50],
+        elbow: [40, 40],
+        fixed: "far-ankle",
+      }),
+      "near-ankle",
+      prop("worktop", 86),
+    ),
+    standard: "right-angle",
+    withoutEquipment: { exercise: "heel-to-buttock", form: "slow" },
+    leadsTo: "hip-hinge",
+    forms: [
+      form("low", 1, "half way", "Lift the heel half way."),
+      form("right-angle", 2, "to a right angle", "Lift until the shin is level."),
+      form("slow", 3, "four counts down", "Take four counts to lower."),
+      form("weight", 4, "with an ankle weight", "Strap a weight to the ankle.", ["weight"]),
+    ],
+  }),
+  exercise({
+    key: "front-thigh-stretch",
+    name: "Front of thigh stretch",
+    region: "knee",
+    kinds: ["mobility"],
+    purpose: "Eases a tight thigh that pulls on the kneecap.",
+    start: "Stand holding something firm. Bend one knee and take hold of the ankle.",
+    steps: [
+      "Keep the knees side by side.",
+      "Tuck your tail under until the front of the thigh feels long.",
+      "Hold and breathe.",
+    ],
+    cautions: [
+      "If you cannot reach the ankle, rest it on a chair behind you.",
+      "Not for a knee that is swollen.",
+    ],
+    sides: "one-at-a-time",
+    muscles: ["front of the thigh"],
+    place: "worktop",
+    supports: ["worktop", "wall", "chair-back"],
+    dose: stretchDose,
+    figure: side(
+      pose(stand, { shoulder: [0, 50], elbow: [4, 40] }),
+      pose(stand, {
+        hip: [-8, 0],
+        knee: [128, 0],
+        ankle: [-30, 0],
+        shoulder: [-34, 50],
+        elbow: [0, 40],
+        fixed: "far-ankle",
+      }),
+      "near-ankle",
+      prop("worktop", 86),
+    ),
+    standard: "standing",
+    withoutEquipment: { exercise: "front-thigh-stretch", form: "standing" },
+    forms: [
+      form("towel", 1, "a towel round the ankle", "Loop a towel round the ankle and hold its ends.", [
+        "towel",
+      ]),
+      form("standing", 2, "holding the ankle", "Hold the ankle with your hand."),
+      form("tail-tuck", 3, "hip pressed forward", "Press the hip forward as well."),
+    ],
+  }),
+  exercise({
+    key: "back-thigh-stretch",
+    name: "Back of thigh stretch",
+    region: "knee",
+    kinds: ["mobility"],
+    purpose: "Gives length to the back of the thigh for a longer stride and an easier bend.",
+    start: "Lie on your back, both knees bent.",
+    steps: [
+      "Hold behind one thigh and bring it upright.",
+      "Straighten the knee until you feel a pull behind the thigh.",
+      "Hold, breathe, then bend again.",
+    ],
+    cautions: ["Tingling down the leg is not a stretch: bend a little.", "Keep the head down."],
+    sides: "one-at-a-time",
+    muscles: ["back of the thigh"],
+    place: "floor-or-bed",
+    supports: ["helper"],
+    dose: stretchDose,
+    figure: side(
+      pose(crookLying, {
+        hip: [90, 45],
+        knee: [84, 117],
+        shoulder: [46, 6],
+        elbow: [34, 4],
+        fixed: "pelvis",
+        x: 62.6,
+      }),
+      pose(crookLying, {
+        hip: [90, 45],
+        knee: [18, 117],
+        shoulder: [46, 6],
+        elbow: [34, 4],
+        fixed: "pelvis",
+        x: 62.6,
+      }),
+      "near-ankle",
+    ),
+    standard: "lying",
+    withoutEquipment: { exercise: "back-thigh-stretch", form: "lying" },
+    forms: [
+      form("soft-knee", 1, "knee half bent", "Straighten only half way."),
+      form("lying", 2, "hands behind the thigh", "Straighten until it pulls comfortably."),
+      form("towel", 3, "towel round the foot", "Loop a towel round the foot and straighten fully.", [
+        "towel",
+      ]),
+    ],
+  }),
+];

@@ -1,0 +1,111 @@
+import { exercise, form } from "../define";
+import { holdDose, strengthDose } from "../dose-ranges";
+import type { Exercise } from "../exercise";
+import { front, pose, prop, side, stand, standFront } from "../pose";
+
+export const shoulderRotators: readonly Exercise[] = [
+  exercise({
+    key: "turn-out",
+    name: "Turn the arm out",
+    region: "shoulder",
+    kinds: ["strength"],
+    purpose: "Strengthens the small muscles at the back of the shoulder that keep the ball centred.",
+    start: "Stand with your elbow bent and tucked to your side, a rolled towel between if you have one.",
+    steps: ["Keep the elbow where it is.", "Turn the forearm out to the side.", "Come back slowly."],
+    cautions: [
+      "After a tendon repair, only when you have been told to start.",
+      "No clicking, no pinching: make it smaller.",
+    ],
+    sides: "one-at-a-time",
+    muscles: ["back of the shoulder"],
+    place: null,
+    supports: ["wall"],
+    dose: strengthDose,
+    figure: front(
+      pose(standFront, { shoulder: [4, 6], elbow: [-100, 0] }),
+      pose(standFront, { shoulder: [4, 6], elbow: [84, 0] }),
+      "near-hand",
+    ),
+    standard: "band",
+    withoutEquipment: { exercise: "turn-out", form: "wall-push" },
+    leadsTo: "arm-lift-side",
+    forms: [
+      form(
+        "wall-push",
+        1,
+        "push into a wall",
+        "Stand beside a wall and push the back of the hand into it, without moving.",
+      ),
+      form("band", 3, "light band", "Hold a band in both hands.", ["band"]),
+      form("side-lying", 4, "lying, with a weight", "Lie on the other side and lift a small weight.", [
+        "weight",
+      ]),
+    ],
+  }),
+  exercise({
+    key: "turn-in",
+    name: "Turn the arm in",
+    region: "shoulder",
+    kinds: ["strength"],
+    purpose: "Strengthens the front of the shoulder for pulling and for reaching behind.",
+    start: "Stand with the elbow bent and tucked in, hand out to the side.",
+    steps: ["Keep the elbow tucked.", "Turn the forearm across your belly.", "Let it go back slowly."],
+    cautions: ["After a tendon repair, only when you have been told to start.", "Keep the wrist straight."],
+    sides: "one-at-a-time",
+    muscles: ["front of the shoulder", "chest"],
+    place: "doorway",
+    supports: ["wall"],
+    dose: strengthDose,
+    figure: front(
+      pose(standFront, { shoulder: [4, 6], elbow: [84, 0] }),
+      pose(standFront, { shoulder: [4, 6], elbow: [-100, 0] }),
+      "near-hand",
+      prop("rail", 104),
+    ),
+    standard: "band",
+    withoutEquipment: { exercise: "turn-in", form: "doorway-push" },
+    leadsTo: "wall-press-up",
+    forms: [
+      form("doorway-push", 1, "push into a doorway", "Push the palm into the door frame without moving."),
+      form("band", 2, "light band", "Fix a band at the height of your elbow.", ["band"]),
+      form(
+        "strong-band",
+        4,
+        "strong band, four counts back",
+        "Use a stronger band and take four counts to let go.",
+        ["band"],
+      ),
+    ],
+  }),
+  exercise({
+    key: "static-shoulder-push",
+    name: "Shoulder push against a wall",
+    region: "shoulder",
+    kinds: ["strength"],
+    purpose: "Keeps the shoulder strong while movement is sore.",
+    start: "Stand facing a wall, elbow bent, fist on the wall.",
+    steps: ["Push gently into the wall.", "Hold at half strength, breathing.", "Let go slowly."],
+    cautions: [
+      "Push hard enough to feel work, not pain.",
+      "After an operation, ask which directions are allowed.",
+    ],
+    sides: "one-at-a-time",
+    muscles: ["front of the shoulder"],
+    place: "wall",
+    supports: ["wall"],
+    dose: holdDose,
+    figure: side(
+      pose(stand, { shoulder: [0, 6], elbow: [90, 8], x: 60 }),
+      pose(stand, { shoulder: [6, 6], elbow: [84, 8], x: 60 }),
+      null,
+      prop("wall", 78),
+    ),
+    standard: "half-strength",
+    leadsTo: "row",
+    forms: [
+      form("quarter", 1, "a quarter of your strength", "Push with a quarter of your strength."),
+      form("half-strength", 2, "half of your strength", "Push with half of your strength."),
+      form("long", 3, "half strength, long hold", "Hold for twenty seconds."),
+    ],
+  }),
+];
