@@ -1,4 +1,5 @@
 export { chooseDeskSite } from "./choose-desk-site";
+export { hasDemoAccounts } from "./has-demo-accounts";
 export { headCounts } from "./head-counts";
 export { listSites } from "./list-sites";
 export { hashPassword, matchesPassword } from "./password";
