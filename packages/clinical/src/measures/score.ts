@@ -129,3 +129,6 @@ export function alarmOf(measure: Measure, entry: MeasureEntry): string | null {
 export function inOtherDirection(value: number): number {
   return 100 - value;
 }
+
+/** Kept with every record: which edition of these rules reckoned its scores. */
+export const scoringEdition = "2026-12";

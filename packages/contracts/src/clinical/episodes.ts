@@ -67,11 +67,7 @@ export const dischargeEpisodeInput = z.strictObject({
 });
 export type DischargeEpisodeInput = z.input<typeof dischargeEpisodeInput>;
 
-export const reopenEpisodeInput = z.strictObject({
-  episodeId: idField,
-  version: versionField,
-  reason: requiredText(200, "Say why it is opened again."),
-});
+export const reopenEpisodeInput = z.strictObject({ episodeId: idField, version: versionField });
 
 /** Who is treated, as it stands at the head of every clinical page. */
 export interface ClinicalPatient {

@@ -9,7 +9,11 @@ type Changes = Partial<
 >;
 
 /** Writes changes to a row that this transaction holds, and gives it its next version. */
-export async function changeEpisode(ctx: Context, episode: EpisodeRow, changes: Changes): Promise<EpisodeRow> {
+export async function changeEpisode(
+  ctx: Context,
+  episode: EpisodeRow,
+  changes: Changes,
+): Promise<EpisodeRow> {
   await ctx.db
     .update(episodes)
     .set({ ...changes, version: episode.version + 1, updatedAt: ctx.clock.now() })

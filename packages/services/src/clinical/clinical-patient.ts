@@ -12,7 +12,11 @@ export interface PatientForCare {
 }
 
 /** Who is treated, with open alerts, for the head of a clinical page. */
-export async function loadPatientForCare(ctx: Context, patientId: string, day: string): Promise<PatientForCare> {
+export async function loadPatientForCare(
+  ctx: Context,
+  patientId: string,
+  day: string,
+): Promise<PatientForCare> {
   const patient = await loadRecord(ctx, patients, patientId, "patient");
   const alerts = await ctx.db
     .select({ text: patientAlerts.text })

@@ -1,12 +1,18 @@
 import { placeWords } from "@withy/clinical/episodes/sides";
-import { type Outcome, outcomes, type ReferralSource, referralSources } from "@withy/clinical/episodes/states";
+import {
+  type Outcome,
+  outcomes,
+  type ReferralSource,
+  referralSources,
+} from "@withy/clinical/episodes/states";
 import type { EpisodeSummary, EpisodeView } from "@withy/contracts/clinical";
 import { dayOf } from "@withy/core/zoned-time";
 import type { Context } from "../context";
 import { loadPatientForCare } from "./clinical-patient";
 import { type EpisodeRow, listNoteLines, loadSite, loadStaffName, type NoteLineRow } from "./episode-records";
 
-const asOutcome = (text: string | null): Outcome | null => outcomes.find((outcome) => outcome === text) ?? null;
+const asOutcome = (text: string | null): Outcome | null =>
+  outcomes.find((outcome) => outcome === text) ?? null;
 const asReferral = (text: string): ReferralSource =>
   referralSources.find((source) => source === text) ?? "other";
 

@@ -1,4 +1,4 @@
-import { episodeIdInput, type EpisodeView } from "@withy/contracts/clinical";
+import { type EpisodeView, episodeIdInput } from "@withy/contracts/clinical";
 import { recordAudit } from "../audit";
 import { verb } from "../verb";
 import { loadEpisode } from "./episode-records";

@@ -1,0 +1,4 @@
+import { dischargeEpisode } from "@withy/services/clinical";
+import { route } from "@/server/run-route";
+
+export const POST = route(dischargeEpisode);

@@ -1,0 +1,4 @@
+import { addAddendum } from "@withy/services/clinical";
+import { route } from "@/server/run-route";
+
+export const POST = route(addAddendum, { status: 201 });

@@ -1,0 +1,4 @@
+import { saveNoteDraft } from "@withy/services/clinical";
+import { route } from "@/server/run-route";
+
+export const PUT = route(saveNoteDraft);

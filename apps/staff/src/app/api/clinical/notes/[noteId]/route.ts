@@ -1,0 +1,4 @@
+import { getNote } from "@withy/services/clinical";
+import { route } from "@/server/run-route";
+
+export const GET = route(getNote);
