@@ -30,6 +30,7 @@ billing.take-payment    yes    -          yes           yes
 billing.refund          yes    -          -             yes
 reports.read            yes    -          -             yes
 messaging.read          yes    -          yes           -
+messaging.send          yes    -          yes           -
 audit.read              yes    -          -             -
 account.own             yes    yes        yes           yes
 `;

@@ -24,6 +24,7 @@ export const permissions = [
   "billing.refund",
   "reports.read",
   "messaging.read",
+  "messaging.send",
   "audit.read",
   "account.own",
 ] as const;

@@ -28,6 +28,7 @@ export const rolePermissions: Record<Role, readonly Permission[]> = {
     "billing.refund",
     "reports.read",
     "messaging.read",
+    "messaging.send",
     "audit.read",
   ],
   therapist: [
@@ -61,6 +62,7 @@ export const rolePermissions: Record<Role, readonly Permission[]> = {
     "billing.issue",
     "billing.take-payment",
     "messaging.read",
+    "messaging.send",
   ],
   accounts: [
     ...everyone,

@@ -1,0 +1,27 @@
+import type { RenderedEmail } from "@withy/documents/message/email";
+import type { SystemContext } from "../context";
+import type { OutboxRow } from "./claim-messages";
+import type { PostOffice, Renderer } from "./message-renderer";
+import { renderPasswordReset, renderStaffInvitation } from "./render-account-message";
+import { renderAppointmentMessage } from "./render-appointment-message";
+import { renderLetterMessage } from "./render-letter-message";
+
+const renderers: Record<string, Renderer> = {
+  "booking-confirmed": renderAppointmentMessage,
+  "booking-moved": renderAppointmentMessage,
+  "booking-cancelled": renderAppointmentMessage,
+  "password-reset": renderPasswordReset,
+  "staff-invitation": renderStaffInvitation,
+  "letter-waiting": renderLetterMessage,
+};
+
+/** The message of an outbox row, or null where it must no longer go. */
+export async function renderMessage(
+  ctx: SystemContext,
+  row: OutboxRow,
+  office: PostOffice,
+): Promise<RenderedEmail | null> {
+  const render = renderers[row.template];
+  if (!render) throw new Error(`No renderer for the template ${row.template}`);
+  return render(ctx, row, office);
+}
