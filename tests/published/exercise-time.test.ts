@@ -1,12 +1,7 @@
 import { compareWithGuidance, moderateEquivalent } from "@withy/clinical/programmes/activity-guidance";
-import {
-  intervalSeconds,
-  setTime,
-  tempoSeconds,
-  timerText,
-  weekSeconds,
-} from "@withy/clinical/programmes/compute-time";
+import { intervalSeconds, setTime, tempoSeconds, weekSeconds } from "@withy/clinical/programmes/compute-time";
 import { painBand } from "@withy/clinical/programmes/pain-bands";
+import { clockDuration } from "@withy/core/date-words";
 import { describe, expect, it } from "vitest";
 
 /** Computed from the stated rules; the rules themselves are common practice, no published source. */
@@ -47,7 +42,7 @@ describe("interval sessions", () => {
         lastRest: row.lastRest,
       });
       expect(seconds).toBe(row.seconds);
-      expect(timerText(seconds)).toBe(row.timer);
+      expect(clockDuration(seconds)).toBe(row.timer);
     },
   );
 });

@@ -100,10 +100,3 @@ export function sessionTime(programme: Programme): SetTime {
 export function weekSeconds(perSession: number, sessionsPerWeek: number): number {
   return perSession * sessionsPerWeek;
 }
-
-/** Minutes and seconds as on a timer: 1200 is "20:00"; an hour is "60:00". */
-export function timerText(seconds: number): string {
-  const whole = Math.round(seconds);
-  const minutes = Math.floor(whole / 60);
-  return `${String(minutes).padStart(2, "0")}:${String(whole % 60).padStart(2, "0")}`;
-}
