@@ -37,6 +37,8 @@ export const outboxMessages = mysqlTable(
   (t) => [
     index("outbox_messages_due").on(t.state, t.dueAt),
     index("outbox_messages_by_practice").on(t.practiceId, t.createdAt),
+    // A patient's timeline.
+    index("outbox_messages_by_patient").on(t.practiceId, t.patientId, t.createdAt),
     index("outbox_messages_by_subject").on(t.practiceId, t.aboutKind, t.aboutId),
     uniqueIndex("outbox_messages_once").on(t.practiceId, t.dedupeKey),
   ],

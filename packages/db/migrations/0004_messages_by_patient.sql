@@ -1,0 +1,1 @@
+CREATE INDEX `outbox_messages_by_patient` ON `outbox_messages` (`practice_id`,`patient_id`,`created_at`);
