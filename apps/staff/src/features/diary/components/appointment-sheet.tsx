@@ -1,0 +1,179 @@
+"use client";
+import type { AppointmentView } from "@withy/contracts/diary";
+import { plainDateWords, shortDate } from "@withy/core/date-words";
+import { ageOn } from "@withy/core/zoned-time";
+import { stateFacts } from "@withy/diary/appointment-states";
+import { AlertLine } from "@withy/ui/alert-line";
+import { Button, ButtonLink } from "@withy/ui/button";
+import { Key } from "@withy/ui/key";
+import { Money } from "@withy/ui/money";
+import { Skeleton } from "@withy/ui/skeleton";
+import Link from "next/link";
+import { type ReactNode, useEffect, useRef } from "react";
+import { problemItems } from "@/api/form-problems";
+import { useAppointment } from "../hooks/use-appointment";
+import { SheetStates, type SheetVerbs } from "./sheet-states";
+
+export interface AppointmentSheetProps {
+  appointmentId: string;
+  today: string;
+  verbs: SheetVerbs;
+  onMove: (() => void) | undefined;
+  onClose: () => void;
+}
+
+/** One visit, laid on the page: who, when, what may be done now, each verb with its key. */
+export function AppointmentSheet({ appointmentId, today, verbs, onMove, onClose }: AppointmentSheetProps) {
+  const query = useAppointment(appointmentId);
+  const heading = useRef<HTMLHeadingElement>(null);
+  const isThere = query.data !== undefined;
+  useEffect(() => {
+    if (isThere) heading.current?.focus({ preventScroll: true });
+  }, [appointmentId, isThere]);
+  return (
+    <aside
+      className="sheetside"
+      aria-label="The appointment"
+      onKeyDown={(event) => event.key === "Escape" && onClose()}
+    >
+      {query.error && <AlertLine tone="danger">{problemItems(query.error)[0]?.message}</AlertLine>}
+      {query.isPending && <Skeleton lines={8} label="Loading the appointment" />}
+      {query.data && (
+        <>
+          <Who view={query.data} today={today} heading={heading} />
+          <When view={query.data} />
+          <SheetStates view={query.data} verbs={verbs} />
+          <Owed view={query.data} />
+          <Around view={query.data} today={today} />
+        </>
+      )}
+      <div className="fin">
+        {query.data && verbs.canBook && (
+          <ButtonLink
+            kind="primary"
+            as={Link}
+            href={`/diary/find?patient=${query.data.patient.id}`}
+            shortcut="B"
+          >
+            Book next
+          </ButtonLink>
+        )}
+        {query.data?.canMove && onMove && (
+          <Button shortcut="M" onClick={onMove}>
+            Move
+          </Button>
+        )}
+        <Button kind="plain" shortcut="Esc" onClick={onClose}>
+          Close
+        </Button>
+      </div>
+    </aside>
+  );
+}
+
+function Row({ gutter, children }: { gutter?: ReactNode; children: ReactNode }) {
+  return (
+    <div className="r">
+      <span>{gutter}</span>
+      <div className="ln">{children}</div>
+    </div>
+  );
+}
+
+function Who({
+  view,
+  today,
+  heading,
+}: {
+  view: AppointmentView;
+  today: string;
+  heading: React.RefObject<HTMLHeadingElement | null>;
+}) {
+  const { patient } = view;
+  return (
+    <div className="part">
+      <div className="r">
+        <span>{view.startTime}</span>
+        <div>
+          <h2 ref={heading} tabIndex={-1}>
+            <Link href={`/patients/${patient.id}`}>{patient.name}</Link> <Key>O</Key>
+          </h2>
+          <p className="small soft num">
+            {patient.preferredName && `Likes “${patient.preferredName}”. `}
+            Born {plainDateWords(patient.bornOn)}, {ageOn(patient.bornOn, today)}
+          </p>
+        </div>
+      </div>
+      {[patient.communicationNeeds, ...patient.alerts]
+        .filter((text): text is string => Boolean(text))
+        .map((text) => (
+          <div key={text} className="sheetalert">
+            <AlertLine>{text}</AlertLine>
+          </div>
+        ))}
+    </div>
+  );
+}
+
+function When({ view }: { view: AppointmentView }) {
+  return (
+    <div className="part">
+      <Row gutter="until">
+        {view.endTime}, {view.service.name.toLowerCase()}, {view.durationMinutes} minutes
+      </Row>
+      <Row gutter="with">
+        {view.therapist.name}, in {view.room.name}, {view.site.name}
+      </Row>
+      {view.patient.phone && (
+        <Row gutter="tel">
+          <a className="num" href={`tel:${view.patient.phone.replace(/\s/g, "")}`}>
+            {view.patient.phone}
+          </a>
+        </Row>
+      )}
+      {view.cancellation && (
+        <Row gutter="why">
+          Cancelled by the {view.cancellation.by}
+          {view.cancellation.isLate ? ", late" : ""}: {view.cancellation.reason}
+        </Row>
+      )}
+      {view.overrideReason && <Row gutter="note">Outside the usual hours: {view.overrideReason}</Row>}
+    </div>
+  );
+}
+
+function Owed({ view }: { view: AppointmentView }) {
+  if (view.owesPence === null || view.owesPence === 0) return null;
+  return (
+    <div className="part">
+      <Row gutter="owes">
+        <Money pence={view.owesPence} strong />{" "}
+        <Link href={`/patients/${view.patient.id}/money`}>Open the account</Link>
+      </Row>
+    </div>
+  );
+}
+
+function Around({ view, today }: { view: AppointmentView; today: string }) {
+  const { previousVisit: before, nextVisit: after, deskNote } = view;
+  if (!before && !after && !deskNote) return null;
+  return (
+    <div className="part">
+      {before && (
+        <Row gutter={shortDate(before.day, today)}>
+          {stateFacts[before.state].word}, {before.startTime}, {before.therapistName}
+        </Row>
+      )}
+      {after && (
+        <Row gutter={shortDate(after.day, today)}>
+          {stateFacts[after.state].word}, {after.startTime}, {after.therapistName}
+        </Row>
+      )}
+      {deskNote && (
+        <Row gutter="desk">
+          <em className="serif">{deskNote}</em>
+        </Row>
+      )}
+    </div>
+  );
+}

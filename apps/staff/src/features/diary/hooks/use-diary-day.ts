@@ -1,0 +1,36 @@
+import { keepPreviousData, useQuery, useQueryClient } from "@tanstack/react-query";
+import type { DiaryDayView } from "@withy/contracts/diary";
+import { useEffect } from "react";
+import { type DayFilters, fetchDay, fetchPulse } from "../api-client";
+import { diaryKeys } from "../query-keys";
+
+/** Another desk's change must show within two seconds: a cheap question every second and a half. */
+const pulseMs = 1500;
+
+/** The day, kept up to date with what other desks do. `first` is what the page was rendered with. */
+export function useDiaryDay(filters: DayFilters, first: { filters: DayFilters; day: DiaryDayView }) {
+  const client = useQueryClient();
+  const isFirst = JSON.stringify(filters) === JSON.stringify(first.filters);
+  const query = useQuery({
+    queryKey: diaryKeys.day(filters),
+    queryFn: ({ signal }) => fetchDay(filters, signal),
+    placeholderData: keepPreviousData,
+    ...(isFirst ? { initialData: first.day } : {}),
+  });
+  const siteIds = query.data?.sites.map((site) => site.id) ?? [];
+  const pulse = useQuery({
+    queryKey: diaryKeys.pulse(siteIds),
+    queryFn: ({ signal }) => fetchPulse(siteIds, signal),
+    enabled: siteIds.length > 0,
+    refetchInterval: pulseMs,
+    staleTime: 0,
+  });
+  const theirs = pulse.data?.pulse;
+  const ours = query.data?.pulse;
+  const isIdle = !query.isFetching;
+  useEffect(() => {
+    if (theirs !== undefined && isIdle && theirs !== ours)
+      void client.invalidateQueries({ queryKey: diaryKeys.all });
+  }, [theirs, ours, isIdle, client]);
+  return query;
+}

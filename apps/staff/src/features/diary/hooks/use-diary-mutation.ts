@@ -1,0 +1,32 @@
+import { useMutation, useQueryClient } from "@tanstack/react-query";
+import type { AppointmentView } from "@withy/contracts/diary";
+import { timeOf } from "@withy/core/zoned-time";
+import { useChanges } from "@withy/ui/recent-changes";
+import { diaryKeys } from "../query-keys";
+
+interface Said {
+  said: string;
+  undo?: (() => Promise<AppointmentView>) | undefined;
+}
+
+/** A write on one visit: puts the answer in place, reads the rest again, and adds a line to the recent changes. */
+export function useDiaryMutation<Input>(
+  run: (input: Input) => Promise<AppointmentView>,
+  describe: (view: AppointmentView, input: Input) => Said,
+) {
+  const client = useQueryClient();
+  const { announce } = useChanges();
+  const settle = async (view: AppointmentView) => {
+    client.setQueryData(diaryKeys.appointment(view.id), view);
+    await client.invalidateQueries({ queryKey: diaryKeys.all });
+  };
+  return useMutation({
+    mutationFn: run,
+    onSuccess: async (view, input) => {
+      const { said, undo } = describe(view, input);
+      const at = timeOf(new Date(), view.site.zone);
+      announce({ at, said, ...(undo ? { undo: () => undo().then(settle) } : {}) });
+      await settle(view);
+    },
+  });
+}
