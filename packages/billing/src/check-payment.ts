@@ -15,8 +15,8 @@ export const paymentMethodWords: Record<PaymentMethod, string> = {
 export interface PayableInvoice {
   readonly state: InvoiceState;
   readonly owedPence: Pence;
-  /** Held by card payments that were begun and not yet settled. */
-  readonly pendingPence: Pence;
+  /** Owed, and not held by a card payment that was begun and has not ended. */
+  readonly freePence: Pence;
 }
 
 const closed: Partial<Record<InvoiceState, string>> = {
@@ -40,11 +40,11 @@ export function checkPayment(invoice: PayableInvoice, amountPence: Pence): Refus
       "amountPence",
     );
   }
-  const free = invoice.owedPence - invoice.pendingPence;
-  if (amountPence > free) {
+  if (amountPence > invoice.freePence) {
+    const pending = formatMoney(invoice.owedPence - invoice.freePence);
     return refusal(
       "card-payment-open",
-      `A card payment of ${formatMoney(invoice.pendingPence)} is still open on this invoice. Wait for it, or cancel it first.`,
+      `A card payment of ${pending} is still open on this invoice. Wait for it, or cancel it first.`,
       "amountPence",
     );
   }
