@@ -7,6 +7,17 @@ export { listEpisodes } from "./list-episodes";
 export { listMeasures } from "./list-measures";
 export { countUnsignedNotes, listUnsignedNotes } from "./list-unsigned-notes";
 export { openEpisode } from "./open-episode";
+export {
+  createProgramme,
+  getExercise,
+  getExerciseLibrary,
+  getProgramme,
+  issueProgramme,
+  listProgrammes,
+  type RenderedHandout,
+  renderHandout,
+  saveProgramme,
+} from "./programmes";
 export { recordMeasure } from "./record-measure";
 export { recordRedFlags } from "./record-red-flags";
 export { saveGoals } from "./save-goals";
