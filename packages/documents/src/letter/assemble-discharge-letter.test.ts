@@ -25,9 +25,14 @@ describe("a discharge letter assembled from the record", () => {
       "Goal: Walk to the harbour and back (met by 24 November 2026).",
       "Goal: Kneel in the garden (not met yet).",
     ]);
-    expect(textsOf(hipFacts, "findings").at(-1)).toBe(
-      "Left hip flexion: 105° on 1 December 2026 (95° on 6 October 2026).",
-    );
+    expect(textsOf(hipFacts, "findings")).toEqual([
+      "At the first visit: Short steps on the left; cannot cross the leg.",
+      "At the last visit: Even steps.",
+    ]);
+    expect(textsOf(hipFacts, "safety")).toEqual([
+      "Warning signs asked about and absent: Fever or feeling unwell; Unexplained weight loss.",
+      "One other sign was not asked about.",
+    ]);
     expect(textsOf(hipFacts, "scales")).toEqual([
       "Pain on walking: 6 on 6 October 2026, 3 on 1 December 2026, out of 10. Better by 3, beyond measurement error (2.0).",
       "30-second chair stand: 13 stands on 1 December 2026. Not below average for women 60 to 64: 12 or more expected.",
@@ -39,7 +44,9 @@ describe("a discharge letter assembled from the record", () => {
     expect(textsOf(hipFacts, "advice")[0]).toBe(
       "Home programme of three exercises, two rounds, about 20 minutes a session, on three days a week: sit to stand, bridge and side step.",
     );
-    expect(textsOf(hipFacts, "allergies")).toEqual(["Not asked by this service."]);
+    expect(textsOf(hipFacts, "allergies")).toEqual([
+      "Not recorded separately by this service; see Relevant history for what was asked.",
+    ]);
   });
 
   it("gives the doctor and the patient actions of their own", () => {
@@ -49,7 +56,7 @@ describe("a discharge letter assembled from the record", () => {
   });
 
   it("asks the doctor to look where a warning sign was present", () => {
-    const redFlags = { present: ["Unexplained weight loss"], absent: [], notAsked: [] };
+    const redFlags = { present: ["Unexplained weight loss"], absent: [], notAsked: 0 };
     const facts = { ...hipFacts, episode: { ...hipFacts.episode, redFlags } };
     expect(textsOf(facts, "plan")).toContain("Please review the warning signs under Safety alerts.");
     expect(textsOf(facts, "safety")).toEqual(["Warning signs present: Unexplained weight loss."]);
@@ -62,12 +69,11 @@ describe("a discharge letter assembled from the record", () => {
         ...hipFacts.episode,
         side: "none",
         goals: [],
-        redFlags: { present: [], absent: [], notAsked: [] },
+        redFlags: { present: [], absent: [], notAsked: 0 },
       },
       visits: { attended: 0, missed: 0, firstOn: null, lastOn: null },
       history: [],
       examined: { first: null, last: null },
-      findings: [],
       measures: [],
       treatments: [],
       programme: null,

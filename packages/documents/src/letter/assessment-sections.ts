@@ -1,7 +1,7 @@
 import type { LetterSentence, LetterSource } from "@withy/contracts/letters";
 import { plainDateWords, shortDate } from "@withy/core/date-words";
-import type { DischargeFacts, MeasuredFinding, MeasureFact } from "./discharge-facts";
-import { assembled, noteSource, sideWords } from "./wording";
+import type { DischargeFacts, MeasureFact, NotedText } from "./discharge-facts";
+import { assembled, capital, noted, numberWord, sideWords } from "./wording";
 
 const episodeSource = ({ episode }: DischargeFacts): LetterSource => ({
   kind: "episode",
@@ -41,9 +41,7 @@ const referrerWords: Record<DischargeFacts["episode"]["referral"]["source"], str
 };
 
 export function history(facts: DischargeFacts): LetterSentence[] {
-  return facts.history.map((note) =>
-    assembled("history", note.noteId, note.text, noteSource(note, facts.today)),
-  );
+  return facts.history.flatMap((note) => noted("history", note, facts.today));
 }
 
 export function concerns(facts: DischargeFacts): LetterSentence[] {
@@ -54,29 +52,12 @@ export function concerns(facts: DischargeFacts): LetterSentence[] {
   });
 }
 
-function findingWords({ name, unit, first, last }: MeasuredFinding): string {
-  const now = `${name}: ${last.value}${unit} on ${plainDateWords(last.on)}`;
-  return first.on === last.on ? now : `${now} (${first.value}${unit} on ${plainDateWords(first.on)})`;
-}
-
 export function findings(facts: DischargeFacts): LetterSentence[] {
   const { first, last } = facts.examined;
-  const noted = [
-    ...(first
-      ? [assembled("findings", "first", `At the first visit: ${first.text}`, noteSource(first, facts.today))]
-      : []),
-    ...(last && last.noteId !== first?.noteId
-      ? [assembled("findings", "last", `At the last visit: ${last.text}`, noteSource(last, facts.today))]
-      : []),
-  ];
-  const measured = facts.findings.map((finding) =>
-    assembled("findings", finding.key, findingWords(finding), {
-      kind: "note",
-      id: finding.last.noteId,
-      label: `Note, ${shortDate(finding.last.on, facts.today)}`,
-    }),
-  );
-  return [...noted, ...measured];
+  const at = (note: NotedText | null, opening: string) =>
+    note ? noted("findings", note, facts.today, { opening }) : [];
+  const isOnce = last?.noteId === first?.noteId;
+  return [...at(first, "At the first visit"), ...(isOnce ? [] : at(last, "At the last visit"))];
 }
 
 function measureWords({ name, scale, first, last, timesTaken, change, standing }: MeasureFact): string {
@@ -106,16 +87,19 @@ export function safety(facts: DischargeFacts): LetterSentence[] {
   const said = [
     ...say("present", "Warning signs present", present),
     ...say("absent", "Warning signs asked about and absent", absent),
-    ...say("not-asked", "Warning signs not asked about", notAsked),
   ];
+  if (said.length > 0 && notAsked > 0) {
+    const text = `${capital(numberWord(notAsked))} other ${notAsked === 1 ? "sign was" : "signs were"} not asked about`;
+    said.push(assembled("safety", "not-asked", text, source));
+  }
   return said.length > 0
     ? said
     : [assembled("safety", "none", "No check for warning signs is on record", source)];
 }
 
+/** The record has no field for allergies: the letter must not let silence read as "none known". */
 export function allergies(facts: DischargeFacts): LetterSentence[] {
   const source: LetterSource = { kind: "patient", id: facts.patient.id, label: "Patient record" };
-  const words = { none: "None known", "not-asked": "Not asked by this service" } as const;
-  const { allergies: known } = facts;
-  return [assembled("allergies", "all", known.known === "listed" ? known.text : words[known.known], source)];
+  const where = facts.history.length > 0 ? "; see Relevant history for what was asked" : "";
+  return [assembled("allergies", "all", `Not recorded separately by this service${where}`, source)];
 }

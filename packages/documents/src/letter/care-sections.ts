@@ -1,7 +1,7 @@
 import type { LetterSentence, LetterSource } from "@withy/contracts/letters";
 import { plainDateWords, shortDate } from "@withy/core/date-words";
 import type { DischargeFacts, NotedText, ProgrammeFact } from "./discharge-facts";
-import { assembled, capital, listWords, noteSource, numberWord } from "./wording";
+import { assembled, capital, listWords, noted, numberWord } from "./wording";
 
 export function attendance(facts: DischargeFacts): LetterSentence[] {
   const { attended, missed, firstOn, lastOn } = facts.visits;
@@ -33,13 +33,8 @@ function withoutRepeats(notes: readonly NotedText[]): NotedText[] {
 }
 
 export function summary(facts: DischargeFacts): LetterSentence[] {
-  return withoutRepeats(facts.treatments).map((note) =>
-    assembled(
-      "summary",
-      note.noteId,
-      `Treatment on ${plainDateWords(note.on)}: ${note.text}`,
-      noteSource(note, facts.today),
-    ),
+  return withoutRepeats(facts.treatments).flatMap((note) =>
+    noted("summary", note, facts.today, { opening: `Treatment on ${plainDateWords(note.on)}` }),
   );
 }
 
@@ -57,9 +52,7 @@ function programmeWords(programme: ProgrammeFact): string {
 
 export function advice(facts: DischargeFacts): LetterSentence[] {
   const { programme } = facts;
-  const said = withoutRepeats(facts.advice).map((note) =>
-    assembled("advice", note.noteId, note.text, noteSource(note, facts.today)),
-  );
+  const said = withoutRepeats(facts.advice).flatMap((note) => noted("advice", note, facts.today));
   if (!programme || programme.exercises.length === 0) return said;
   const label = `Programme, ${shortDate(programme.on, facts.today)}`;
   const source: LetterSource = { kind: "programme", id: programme.programmeId, label };
@@ -70,20 +63,8 @@ export function advice(facts: DischargeFacts): LetterSentence[] {
 export function plan(facts: DischargeFacts): LetterSentence[] {
   const source: LetterSource = { kind: "episode", id: facts.episode.id, label: "Episode" };
   const isAlerted = facts.episode.redFlags.present.length > 0;
-  const sentences = [
-    assembled(
-      "plan",
-      "discharge",
-      "Discharged from physiotherapy; no further visit is booked for this problem",
-      source,
-      "practice",
-    ),
-  ];
-  if (facts.plan && facts.plan.text.trim() !== "") {
-    sentences.push(
-      assembled("plan", "noted", facts.plan.text, noteSource(facts.plan, facts.today), "practice"),
-    );
-  }
+  const sentences = [assembled("plan", "discharge", "Discharged from physiotherapy", source, "practice")];
+  if (facts.plan) sentences.push(...noted("plan", facts.plan, facts.today, { actor: "practice" }));
   sentences.push(
     assembled(
       "plan",

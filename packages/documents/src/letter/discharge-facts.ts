@@ -7,18 +7,9 @@ export interface NotedText {
   readonly noteId: string;
   readonly noteKind: "initial" | "session";
   readonly on: PlainDateText;
+  /** The heading of the note that it stands under. */
+  readonly part: string;
   readonly text: string;
-}
-
-/** One movement or strength measured at the first and at the last assessment. */
-export interface MeasuredFinding {
-  /** Stable name for the fact, for example "left-hip-flexion". */
-  readonly key: string;
-  /** In words with its side: "Left hip flexion". */
-  readonly name: string;
-  readonly unit: string;
-  readonly first: { readonly value: number; readonly on: PlainDateText };
-  readonly last: { readonly noteId: string; readonly value: number; readonly on: PlainDateText };
 }
 
 /** One outcome measure over the episode. `last` equals `first` where it was taken once. */
@@ -49,7 +40,8 @@ export interface ProgrammeFact {
 export interface RedFlagFacts {
   readonly absent: readonly string[];
   readonly present: readonly string[];
-  readonly notAsked: readonly string[];
+  /** How many were not asked about. */
+  readonly notAsked: number;
 }
 
 /** Everything that a discharge letter says, as plain data taken from the record. */
@@ -81,14 +73,10 @@ export interface DischargeFacts {
   readonly history: readonly NotedText[];
   /** Examination in the therapist's words, first and last. */
   readonly examined: { readonly first: NotedText | null; readonly last: NotedText | null };
-  readonly findings: readonly MeasuredFinding[];
   readonly measures: readonly MeasureFact[];
   readonly treatments: readonly NotedText[];
   readonly programme: ProgrammeFact | null;
   readonly advice: readonly NotedText[];
   /** The plan of the last note, in the therapist's words. */
   readonly plan: NotedText | null;
-  readonly allergies:
-    | { readonly known: "none" | "not-asked" }
-    | { readonly known: "listed"; readonly text: string };
 }

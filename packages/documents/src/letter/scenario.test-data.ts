@@ -25,29 +25,29 @@ export const hipFacts: DischargeFacts = {
     redFlags: {
       present: [],
       absent: ["Fever or feeling unwell", "Unexplained weight loss"],
-      notAsked: ["Night pain that wakes"],
+      notAsked: 1,
     },
   },
   visits: { attended: 5, missed: 1, firstOn: "2026-10-06", lastOn: "2026-12-01" },
-  history: [{ noteId: id(3), noteKind: "initial", on: "2026-10-06", text: "takes an anticoagulant" }],
+  history: [
+    {
+      noteId: id(3),
+      noteKind: "initial",
+      on: "2026-10-06",
+      part: "background",
+      text: "takes an anticoagulant",
+    },
+  ],
   examined: {
     first: {
       noteId: id(3),
       noteKind: "initial",
       on: "2026-10-06",
+      part: "examination",
       text: "Short steps on the left; cannot cross the leg.",
     },
-    last: { noteId: id(4), noteKind: "session", on: "2026-12-01", text: "Even steps." },
+    last: { noteId: id(4), noteKind: "session", on: "2026-12-01", part: "examination", text: "Even steps." },
   },
-  findings: [
-    {
-      key: "left-hip-flexion",
-      name: "Left hip flexion",
-      unit: "°",
-      first: { value: 95, on: "2026-10-06" },
-      last: { noteId: id(4), value: 105, on: "2026-12-01" },
-    },
-  ],
   measures: [
     {
       key: "pain",
@@ -71,9 +71,21 @@ export const hipFacts: DischargeFacts = {
     },
   ],
   treatments: [
-    { noteId: id(3), noteKind: "initial", on: "2026-10-06", text: "advice and graded strength work" },
-    { noteId: id(7), noteKind: "session", on: "2026-10-20", text: "Advice and graded strength work" },
-    { noteId: id(4), noteKind: "session", on: "2026-12-01", text: "practice on stairs" },
+    {
+      noteId: id(3),
+      noteKind: "initial",
+      on: "2026-10-06",
+      part: "treatment",
+      text: "advice and graded strength work",
+    },
+    {
+      noteId: id(7),
+      noteKind: "session",
+      on: "2026-10-20",
+      part: "treatment",
+      text: "Advice and graded strength work",
+    },
+    { noteId: id(4), noteKind: "session", on: "2026-12-01", part: "treatment", text: "practice on stairs" },
   ],
   programme: {
     programmeId: id(8),
@@ -84,13 +96,19 @@ export const hipFacts: DischargeFacts = {
     daysPerWeek: 3,
   },
   advice: [
-    { noteId: id(4), noteKind: "session", on: "2026-12-01", text: "Step down if two mornings are worse" },
+    {
+      noteId: id(4),
+      noteKind: "session",
+      on: "2026-12-01",
+      part: "advice",
+      text: "Step down if two mornings are worse",
+    },
   ],
   plan: {
     noteId: id(4),
     noteKind: "session",
     on: "2026-12-01",
+    part: "plan",
     text: "May ring within six months without a new referral",
   },
-  allergies: { known: "not-asked" },
 };

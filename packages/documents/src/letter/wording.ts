@@ -64,5 +64,26 @@ export function assembled(
   actor: LetterActor | null = null,
 ): LetterSentence {
   const said = sentenceOf(text);
-  return { id: `${section}:${slug}`, text: said, source, assembled: said, actor };
+  return { id: `${section}:${slug}`, text: said, source, assembled: said, actor, keptBecause: null };
+}
+
+/** What a note says under one heading: a line of the note is a sentence of the letter. */
+export function noted(
+  section: LetterSectionKey,
+  note: NotedText,
+  today: PlainDateText,
+  options: { opening?: string; actor?: LetterActor } = {},
+): LetterSentence[] {
+  const lines = note.text.split(/\n+/).filter((line) => line.trim() !== "");
+  const source = noteSource(note, today);
+  return lines.map((line, index) => {
+    const text = index === 0 && options.opening ? `${options.opening}: ${line.trim()}` : line;
+    return assembled(
+      section,
+      `${note.noteId}-${note.part}-${index + 1}`,
+      text,
+      source,
+      options.actor ?? null,
+    );
+  });
 }

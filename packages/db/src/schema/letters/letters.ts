@@ -29,6 +29,8 @@ export interface LetterSentence {
   assembled: string | null;
   /** Who an action of the plan is for. */
   actor: string | null;
+  /** Why an older wording stays although the record has changed. */
+  keptBecause: string | null;
 }
 
 export interface LetterSection {
@@ -86,7 +88,10 @@ export const letters = mysqlTable(
   ],
 );
 
-/** One sending of a signed letter. What became of it is read from its outbox row. */
+/**
+ * One sending of a signed letter. What became of the mail is read from its outbox row; the mail carries no letter,
+ * only a private link, of which the SHA-256 is kept here with what was done with it.
+ */
 export const letterDeliveries = mysqlTable(
   "letter_deliveries",
   {
@@ -99,6 +104,10 @@ export const letterDeliveries = mysqlTable(
     requestedBy: uuid("requested_by").notNull(),
     requestedAt: instant("requested_at").notNull(),
     postedOn: plainDate("posted_on"),
+    tokenHash: varchar("token_hash", { length: 64 }),
+    expiresAt: instant("expires_at"),
+    firstOpenedAt: instant("first_opened_at"),
+    openedCount: int("opened_count").notNull().default(0),
   },
   (t) => [
     primaryKey({ columns: [t.practiceId, t.id] }),
@@ -107,6 +116,8 @@ export const letterDeliveries = mysqlTable(
       columns: [t.practiceId, t.letterId],
       foreignColumns: [letters.practiceId, letters.id],
     }),
+    // The link is looked up before any practice is known.
+    uniqueIndex("letter_deliveries_token").on(t.tokenHash),
     index("letter_deliveries_by_letter").on(t.practiceId, t.letterId, t.requestedAt),
   ],
 );
