@@ -99,24 +99,48 @@ interface Reachable {
   preferredChannel: PreferredChannel;
 }
 
-function checkReach(input: Reachable, ctx: z.core.$RefinementCtx): void {
-  const issue = (field: string, message: string) =>
-    ctx.addIssue({ code: "custom", path: [field], message, input });
-  if (input.phone === null && !input.hasNoPhone)
-    issue("phone", "Enter a phone number, or tick that there is none.");
-  if (input.preferredChannel === "email" && input.email === null)
-    issue("email", "Enter an e-mail address, or choose another way to reach the patient.");
-  if ((input.preferredChannel === "text" || input.preferredChannel === "phone") && input.hasNoPhone)
-    issue("preferredChannel", "Choose a way that does not need a phone.");
-  if (input.preferredChannel === "post" && input.addressLines.length === 0)
-    issue("addressLines", "Enter the address, or choose another way to reach the patient.");
+/** Asked even where other fields have mistakes, so that all of them are told at once; not where its own do. */
+const unlessWrong = (fields: readonly string[]) => ({
+  when: ({ issues }: z.core.ParsePayload) => !issues.some((i) => fields.includes(String(i.path?.[0]))),
+});
+
+const reach = [
+  {
+    field: "phone",
+    message: "Enter a phone number, or tick that there is none.",
+    holds: (p: Reachable) => p.phone !== null || p.hasNoPhone,
+  },
+  {
+    field: "email",
+    message: "Enter an e-mail address, or choose another way to reach the patient.",
+    holds: (p: Reachable) => p.preferredChannel !== "email" || p.email !== null,
+  },
+  {
+    field: "preferredChannel",
+    message: "Choose a way that does not need a phone.",
+    holds: (p: Reachable) =>
+      !p.hasNoPhone || (p.preferredChannel !== "text" && p.preferredChannel !== "phone"),
+  },
+  {
+    field: "addressLines",
+    message: "Enter the address, or choose another way to reach the patient.",
+    holds: (p: Reachable) => p.preferredChannel !== "post" || p.addressLines.length > 0,
+  },
+];
+
+function withReach<S extends z.ZodType<Reachable>>(schema: S): S {
+  return reach.reduce<S>(
+    (built, { field, message, holds }) =>
+      built.refine(holds, { path: [field], error: message, ...unlessWrong([field, "preferredChannel"]) }),
+    schema,
+  );
 }
 
-export const registerPatientInput = z.strictObject(details).superRefine(checkReach);
+export const registerPatientInput = withReach(z.strictObject(details));
 export type RegisterPatientInput = z.input<typeof registerPatientInput>;
 export type PatientDetails = z.output<typeof registerPatientInput>;
 
-export const editPatientInput = z
-  .strictObject({ patientId: idField, version: versionField, ...details })
-  .superRefine(checkReach);
+export const editPatientInput = withReach(
+  z.strictObject({ patientId: idField, version: versionField, ...details }),
+);
 export type EditPatientInput = z.input<typeof editPatientInput>;

@@ -1,1 +1,9 @@
-export {};
+export { addGpPractice } from "./add-gp-practice";
+export { editPatient } from "./edit-patient";
+export { getPatient } from "./get-patient";
+export { listGpPractices } from "./list-gp-practices";
+export { listPatients } from "./list-patients";
+export { listPayers } from "./list-payers";
+export { registerPatient } from "./register-patient";
+export { getTimeline } from "./timeline/get-timeline";
+export { whoLooked } from "./who-looked";

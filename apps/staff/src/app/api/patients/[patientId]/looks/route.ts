@@ -1,0 +1,4 @@
+import { whoLooked } from "@withy/services/patients";
+import { route } from "@/server/run-route";
+
+export const GET = route(whoLooked);

@@ -1,0 +1,4 @@
+import { getTimeline } from "@withy/services/patients";
+import { route } from "@/server/run-route";
+
+export const GET = route(getTimeline);
