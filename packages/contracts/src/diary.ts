@@ -1,4 +1,5 @@
 export * from "./diary/appointment";
 export * from "./diary/day";
 export * from "./diary/finding";
+export * from "./diary/message";
 export * from "./diary/today";

@@ -63,6 +63,14 @@ describe("checking a booking", () => {
   });
 });
 
+describe("a closed day", () => {
+  it("says why it is closed", () => {
+    const refused = checkBooking({ ...facts, working: [], closedReason: "Boiler repair" });
+    expect(refused?.kind).toBe("outside-hours");
+    expect(refused?.message).toContain("Saltgate is closed on Tuesday 1 December 2026: Boiler repair.");
+  });
+});
+
 describe("reading a start by the site's clock", () => {
   it.each([
     ["2026-10-20", "09:00", "2026-10-20T08:00:00.000Z"],

@@ -17,6 +17,8 @@ export interface BookingFacts {
   readonly therapist: { readonly name: string; readonly givesService: boolean; readonly isActive: boolean };
   /** When the therapist works at the site around that time, without appointments, leave and blocks taken off. */
   readonly working: readonly Interval[];
+  /** Why the site is closed all that day; absent where it is open. */
+  readonly closedReason?: string | undefined;
   /** Leave and blocks of the therapist and of the room. */
   readonly blocked: readonly (Interval & { readonly reason: string })[];
   /** Why it is booked outside working hours all the same; empty or absent where it is not. */
@@ -81,6 +83,10 @@ function checkHours(f: BookingFacts): Refusal | null {
   }
   if (f.working.some((w) => contains(w, visit))) return null;
   const day = longDate(dayOf(f.startsAt, f.site.zone));
+  if (f.closedReason !== undefined) {
+    const closed = `${f.site.name} is closed on ${day}: ${f.closedReason}. Choose another day, or say why it is booked all the same.`;
+    return refusal("outside-hours", closed, "startsAt");
+  }
   const message = `${f.therapist.name} does not work at ${f.site.name} at that time on ${day}. Choose another time, or say why it is booked all the same.`;
   return refusal("outside-hours", message, "startsAt");
 }

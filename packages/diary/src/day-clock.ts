@@ -33,7 +33,20 @@ function nextChange(from: Temporal.ZonedDateTime, to: Temporal.ZonedDateTime): T
   return change !== null && change.epochMilliseconds < to.epochMilliseconds ? change : null;
 }
 
+const made = new Map<string, DayClock>();
+
+/** The clock of a day; remembered, since a zone's rules do not change while the program runs. */
 export function dayClock(day: PlainDateText, zone: string): DayClock {
+  const key = `${day}${zone}`;
+  const known = made.get(key);
+  if (known) return known;
+  const clock = makeClock(day, zone);
+  if (made.size > 5000) made.clear();
+  made.set(key, clock);
+  return clock;
+}
+
+function makeClock(day: PlainDateText, zone: string): DayClock {
   const date = Temporal.PlainDate.from(day);
   const start = date.toZonedDateTime(zone);
   const end = date.add({ days: 1 }).toZonedDateTime(zone);

@@ -1,1 +1,14 @@
-export {};
+export { bookAppointment } from "./book-appointment";
+export { cancelAppointment } from "./cancel-appointment";
+export { findTimes } from "./find-times";
+export { getAppointment } from "./get-appointment";
+export { getBookingChoices } from "./get-booking-choices";
+export { getDiaryDay } from "./get-diary-day";
+export { getDiaryPulse } from "./get-diary-pulse";
+export { getTherapistWeek } from "./get-therapist-week";
+export { listRecentChanges } from "./list-recent-changes";
+export { listToday } from "./list-today";
+export { markAppointment } from "./mark-appointment";
+export { moveAppointment } from "./move-appointment";
+export { undoCancel } from "./undo-cancel";
+export { undoMark } from "./undo-mark";

@@ -1,0 +1,121 @@
+import { notFound } from "@withy/core/errors";
+import { sql } from "drizzle-orm";
+import type { Context } from "../context";
+import { rowsOf } from "./raw-rows";
+
+/** Who, what and where of a visit, all of the caller's practice. */
+export interface BookingSetting {
+  readonly site: { readonly id: string; readonly name: string; readonly zone: string };
+  readonly therapist: {
+    readonly id: string;
+    readonly name: string;
+    readonly isActive: boolean;
+    readonly givesService: boolean;
+  };
+  readonly service: {
+    readonly id: string;
+    readonly name: string;
+    readonly durationMinutes: number;
+    readonly cleanDownMinutes: number;
+    readonly roomKind: string;
+    readonly isActive: boolean;
+  };
+  readonly room: {
+    readonly id: string;
+    readonly name: string;
+    readonly siteId: string;
+    readonly kind: string;
+  } | null;
+  readonly patient: { readonly id: string; readonly name: string };
+}
+
+export interface BookingIds {
+  readonly siteId: string;
+  readonly therapistId: string;
+  readonly serviceId: string;
+  readonly roomId: string | null;
+  readonly patientId: string;
+  readonly episodeId: string | null;
+}
+
+interface Row {
+  site_id: string | null;
+  site_name: string;
+  zone: string;
+  therapist_id: string | null;
+  therapist_name: string;
+  therapist_active: number;
+  gives: number;
+  service_id: string | null;
+  service_name: string;
+  duration_minutes: number;
+  clean_down_minutes: number;
+  room_kind: string;
+  service_active: number;
+  room_id: string | null;
+  room_name: string;
+  room_site: string;
+  kind: string;
+  patient_id: string | null;
+  patient_name: string;
+  episode_id: string | null;
+}
+
+/** Everything that a booking names, in one statement; whatever is not in the practice is not there. */
+async function readRow(ctx: Context, ids: BookingIds): Promise<Row | undefined> {
+  const p = ctx.practiceId;
+  const rows = await rowsOf<Row>(
+    ctx.db,
+    sql`
+    select s.id as site_id, s.name as site_name, s.zone,
+      t.id as therapist_id, concat(t.given_name, ' ', t.family_name) as therapist_name,
+      (t.is_active and t.is_therapist) as therapist_active, (g.service_id is not null) as gives,
+      v.id as service_id, v.name as service_name, v.duration_minutes, v.clean_down_minutes, v.room_kind,
+      v.is_active as service_active,
+      r.id as room_id, r.name as room_name, r.site_id as room_site, r.kind,
+      c.id as patient_id, concat(c.given_name, ' ', c.family_name) as patient_name,
+      e.id as episode_id
+    from practices x
+      left join sites s on s.practice_id = x.id and s.id = ${ids.siteId}
+      left join staff_members t on t.practice_id = x.id and t.id = ${ids.therapistId}
+      left join services v on v.practice_id = x.id and v.id = ${ids.serviceId}
+      left join service_therapists g on g.practice_id = x.id and g.service_id = v.id and g.staff_member_id = t.id
+      left join rooms r on r.practice_id = x.id and r.id = ${ids.roomId}
+      left join patients c on c.practice_id = x.id and c.id = ${ids.patientId}
+      left join episodes e on e.practice_id = x.id and e.id = ${ids.episodeId} and e.patient_id = c.id
+    where x.id = ${p}`,
+  );
+  return rows[0];
+}
+
+/** @throws not-found for the first of the ids that is not the practice's */
+export async function loadBookingSetting(ctx: Context, ids: BookingIds): Promise<BookingSetting> {
+  const row = await readRow(ctx, ids);
+  if (!row?.site_id) throw notFound("site");
+  if (!row.patient_id) throw notFound("patient");
+  if (!row.service_id) throw notFound("service");
+  if (!row.therapist_id) throw notFound("therapist");
+  if (ids.roomId !== null && !row.room_id) throw notFound("room");
+  if (ids.episodeId !== null && !row.episode_id) throw notFound("episode of care");
+  return {
+    site: { id: row.site_id, name: row.site_name, zone: row.zone },
+    therapist: {
+      id: row.therapist_id,
+      name: row.therapist_name,
+      isActive: row.therapist_active === 1,
+      givesService: row.gives === 1,
+    },
+    service: {
+      id: row.service_id,
+      name: row.service_name,
+      durationMinutes: row.duration_minutes,
+      cleanDownMinutes: row.clean_down_minutes,
+      roomKind: row.room_kind,
+      isActive: row.service_active === 1,
+    },
+    room: row.room_id
+      ? { id: row.room_id, name: row.room_name, siteId: row.room_site, kind: row.kind }
+      : null,
+    patient: { id: row.patient_id, name: row.patient_name },
+  };
+}

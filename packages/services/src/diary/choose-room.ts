@@ -1,0 +1,44 @@
+import { refused } from "@withy/core/errors";
+import { refusal } from "@withy/core/refusal";
+import { overlaps } from "@withy/diary/interval";
+import type { Context } from "../context";
+import { readClaimed, type TherapistDays } from "./therapist-day";
+
+export interface ChosenRoom {
+  readonly id: string;
+  readonly name: string;
+  readonly siteId: string;
+  readonly kind: string;
+}
+
+/**
+ * The first room of the kind, in the site's own order, that is free for the whole of a visit and its clean-down.
+ * @throws refused `no-room` where none is
+ */
+export async function chooseRoom(
+  ctx: Context,
+  days: TherapistDays,
+  kind: string,
+  startsAt: Date,
+  until: Date,
+  movingId: string | null,
+): Promise<ChosenRoom> {
+  const rooms = days.frame.rooms.filter((r) => r.kind === kind);
+  const claimed = await readClaimed(
+    ctx,
+    rooms.map((r) => r.id),
+    startsAt,
+    until,
+    movingId,
+  );
+  const visit = { from: startsAt.getTime(), to: until.getTime() };
+  const blocked = (id: string): boolean =>
+    days.frame.absences.some((a) => a.roomId === id && overlaps(a, visit));
+  const free = rooms.find((r) => (claimed.get(r.id) ?? []).length === 0 && !blocked(r.id));
+  if (free) return free;
+  const message =
+    rooms.length === 0
+      ? `${days.site.name} has no room of the kind that this service needs. Choose another site.`
+      : `No room at ${days.site.name} is free at that time. Choose another time or site.`;
+  throw refused(refusal("no-room", message, "roomId"));
+}

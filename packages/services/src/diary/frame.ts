@@ -1,0 +1,165 @@
+import { addDays, daysBetween, type PlainDateText, weekdayOf } from "@withy/core/zoned-time";
+import type { Busy } from "@withy/diary/availability";
+import { bankHolidayOn, type Nation } from "@withy/diary/bank-holidays";
+import type { WorkingPattern } from "@withy/diary/working-pattern";
+import { type SQL, sql } from "drizzle-orm";
+import type { Context } from "../context";
+import { rowsOf, utc } from "./raw-rows";
+
+/** What a stretch of days looks like before anyone is booked: sites, rooms, people's hours, leave and blocks. */
+export interface Frame {
+  readonly sites: readonly FrameSite[];
+  readonly rooms: readonly FrameRoom[];
+  readonly patterns: readonly FramePattern[];
+  readonly absences: readonly FrameAbsence[];
+}
+
+export interface FrameSite {
+  readonly id: string;
+  readonly name: string;
+  readonly zone: string;
+  readonly nation: Nation;
+  readonly position: number;
+  readonly hours: { weekday: number; opensAt: string; closesAt: string }[];
+  /** Closures and bank holidays, by day, with their reason. */
+  readonly closed: Map<PlainDateText, string>;
+}
+
+export interface FrameRoom {
+  readonly id: string;
+  readonly siteId: string;
+  readonly name: string;
+  readonly kind: "treatment" | "gym" | "video";
+  readonly position: number;
+}
+
+export interface FramePattern extends WorkingPattern {
+  readonly therapistName: string;
+  readonly position: number;
+  readonly breaks: readonly { startsAt: string; endsAt: string; label: string }[];
+}
+
+export interface FrameAbsence extends Busy {
+  readonly id: string;
+  readonly staffMemberId: string | null;
+  readonly roomId: string | null;
+  readonly kind: "leave" | "blocked";
+  readonly reason: string;
+}
+
+export interface FrameQuery {
+  readonly firstDay: PlainDateText;
+  readonly lastDay: PlainDateText;
+  readonly siteIds: readonly string[];
+  /** Absent: everyone who works at these sites. */
+  readonly therapistIds?: readonly string[];
+}
+
+const list = (values: readonly (string | number)[]): SQL =>
+  sql.join(
+    values.map((v) => sql`${v}`),
+    sql`, `,
+  );
+
+/** All the reference rows in one statement: one journey to the database, and no row that the days do not need. */
+function frameSql(practiceId: string, q: FrameQuery): SQL {
+  const sites = list(q.siteIds);
+  const days = Math.min(7, daysBetween(q.firstDay, q.lastDay) + 1);
+  const weekdays = list(Array.from({ length: days }, (_, n) => weekdayOf(addDays(q.firstDay, n))));
+  const people =
+    q.therapistIds === undefined
+      ? sql`select w.staff_member_id from working_patterns w where w.practice_id = ${practiceId} and w.site_id in (${sites})`
+      : list(q.therapistIds);
+  const until = `${addDays(q.lastDay, 2)} 00:00:00`;
+  const from = `${addDays(q.firstDay, -1)} 00:00:00`;
+  return sql`
+    select 'site' as kind, json_object('id', s.id, 'name', s.name, 'zone', s.zone, 'nation', s.nation, 'position', s.position) as data
+      from sites s where s.practice_id = ${practiceId} and s.id in (${sites})
+    union all select 'hours', json_object('siteId', h.site_id, 'weekday', h.weekday, 'opensAt', h.opens_at, 'closesAt', h.closes_at)
+      from site_hours h where h.practice_id = ${practiceId} and h.site_id in (${sites}) and h.weekday in (${weekdays})
+    union all select 'closure', json_object('siteId', c.site_id, 'on', c.closed_on, 'reason', c.reason)
+      from site_closures c where c.practice_id = ${practiceId} and c.site_id in (${sites}) and c.closed_on between ${q.firstDay} and ${q.lastDay}
+    union all select 'room', json_object('id', r.id, 'siteId', r.site_id, 'name', r.name, 'kind', r.kind, 'position', r.position)
+      from rooms r where r.practice_id = ${practiceId} and r.site_id in (${sites})
+    union all select 'pattern', json_object('staffMemberId', p.staff_member_id, 'siteId', p.site_id, 'weekday', p.weekday,
+        'startsAt', p.starts_at, 'endsAt', p.ends_at, 'validFrom', p.valid_from, 'validUntil', p.valid_until,
+        'everyWeeks', p.every_weeks, 'breaks', json_compact(p.breaks),
+        'therapistName', concat(m.given_name, ' ', m.family_name), 'position', m.position)
+      from working_patterns p join staff_members m on m.practice_id = p.practice_id and m.id = p.staff_member_id and m.is_active
+      where p.practice_id = ${practiceId} and p.site_id in (${sites}) and p.weekday in (${weekdays})
+        and p.valid_from <= ${q.lastDay} and (p.valid_until is null or p.valid_until >= ${q.firstDay})
+        ${q.therapistIds === undefined ? sql`` : sql`and p.staff_member_id in (${people})`}
+    union all select 'absence', json_object('id', a.id, 'staffMemberId', a.staff_member_id, 'roomId', a.room_id, 'kind', a.kind,
+        'reason', a.reason, 'startsAt', a.starts_at, 'endsAt', a.ends_at)
+      from absences a where a.practice_id = ${practiceId} and a.staff_member_id in (${people}) and a.ends_at > ${from} and a.starts_at < ${until}
+    union all select 'absence', json_object('id', a.id, 'staffMemberId', a.staff_member_id, 'roomId', a.room_id, 'kind', a.kind,
+        'reason', a.reason, 'startsAt', a.starts_at, 'endsAt', a.ends_at)
+      from absences a where a.practice_id = ${practiceId} and a.ends_at > ${from} and a.starts_at < ${until}
+        and a.room_id in (select r.id from rooms r where r.practice_id = ${practiceId} and r.site_id in (${sites}))`;
+}
+
+interface RawRow {
+  kind: "site" | "hours" | "closure" | "room" | "pattern" | "absence";
+  data: string | object;
+}
+
+interface Raw {
+  id: string;
+  siteId: string;
+  name: string;
+  zone: string;
+  nation: Nation;
+  position: number;
+  kind: "treatment" | "gym" | "video";
+  weekday: number;
+  opensAt: string;
+  closesAt: string;
+  on: string;
+  reason: string;
+  startsAt: string;
+  endsAt: string;
+  staffMemberId: string | null;
+  roomId: string | null;
+}
+
+function closedDays(site: FrameSite, q: FrameQuery): void {
+  for (let day = q.firstDay; day <= q.lastDay; day = addDays(day, 1)) {
+    const holiday = bankHolidayOn(site.nation, day);
+    if (holiday) site.closed.set(day, holiday.name);
+  }
+}
+
+function absenceOf(data: Raw): FrameAbsence {
+  return {
+    id: data.id,
+    staffMemberId: data.staffMemberId,
+    roomId: data.roomId,
+    kind: (data.kind as string) === "leave" ? "leave" : "blocked",
+    reason: data.reason,
+    from: utc(data.startsAt),
+    to: utc(data.endsAt),
+  };
+}
+
+/** Reads the frame of some sites over some days. Nothing in it may be written from. */
+export async function readFrame(ctx: Context, q: FrameQuery): Promise<Frame> {
+  const sites = new Map<string, FrameSite>();
+  const [rooms, patterns, absences]: [FrameRoom[], FramePattern[], FrameAbsence[]] = [[], [], []];
+  if (q.siteIds.length === 0) return { sites: [], rooms, patterns, absences };
+  for (const row of await rowsOf<RawRow>(ctx.db, frameSql(ctx.practiceId, q))) {
+    const data = (typeof row.data === "string" ? JSON.parse(row.data) : row.data) as Raw;
+    if (row.kind === "site") {
+      const { id, name, zone, nation, position } = data;
+      const site: FrameSite = { id, name, zone, nation, position, hours: [], closed: new Map() };
+      closedDays(site, q);
+      sites.set(id, site);
+    } else if (row.kind === "hours") sites.get(data.siteId)?.hours.push(data);
+    else if (row.kind === "closure") sites.get(data.siteId)?.closed.set(data.on, data.reason);
+    else if (row.kind === "room") rooms.push(data);
+    else if (row.kind === "pattern") patterns.push(data as unknown as FramePattern);
+    else absences.push(absenceOf(data));
+  }
+  rooms.sort((a, b) => a.position - b.position);
+  patterns.sort((a, b) => a.position - b.position);
+  return { sites: [...sites.values()].sort((a, b) => a.position - b.position), rooms, patterns, absences };
+}

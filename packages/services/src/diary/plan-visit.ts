@@ -1,0 +1,83 @@
+import { notFound, refused, refuseIf } from "@withy/core/errors";
+import { addMinutes, dayOf, minutesBetween } from "@withy/core/zoned-time";
+import { checkBooking, readStart } from "@withy/diary/check-booking";
+import type { Context } from "../context";
+import { type BookingIds, type BookingSetting, loadBookingSetting } from "./booking-setting";
+import { type ChosenRoom, chooseRoom } from "./choose-room";
+import { claimSlots } from "./claim-slots";
+import { slotTaken } from "./slot-taken";
+import { readTherapistDays } from "./therapist-day";
+
+/** A visit may be written down this long after it began: the desk is busy when someone walks in. */
+const graceMinutes = 60;
+
+export interface PlanWish {
+  /** As the contract's `startField` takes it. */
+  readonly startsAt: string;
+  /** Null: the service's own. */
+  readonly durationMinutes: number | null;
+  readonly cleanDownMinutes: number | null;
+  readonly overrideReason: string | null;
+  readonly movingId: string | null;
+}
+
+/** A visit that every rule allows, with its room; only the claims can still say no. */
+export interface VisitPlan {
+  readonly setting: BookingSetting;
+  readonly room: ChosenRoom;
+  readonly startsAt: Date;
+  readonly endsAt: Date;
+  readonly cleanDownMinutes: number;
+}
+
+/**
+ * The instant behind what was typed: an instant as it is, or a clock time at the site.
+ * @throws refused `clock-gap` for a time that the clocks jump over
+ */
+function startOf(text: string, zone: string): Date {
+  if (/(?:Z|[+-]\d{2}:\d{2})$/i.test(text.slice(16))) return new Date(text);
+  const start = readStart(text.slice(0, 10), text.slice(11, 16), zone);
+  if (start instanceof Date) return start;
+  throw refused(start);
+}
+
+/** Asks every rule about a visit and settles its room. @throws not-found, or refused with the first thing in the way */
+export async function planVisit(ctx: Context, ids: BookingIds, wish: PlanWish): Promise<VisitPlan> {
+  const setting = await loadBookingSetting(ctx, ids);
+  const { site, service, therapist } = setting;
+  const startsAt = startOf(wish.startsAt, site.zone);
+  const durationMinutes = wish.durationMinutes ?? service.durationMinutes;
+  const cleanDownMinutes = wish.cleanDownMinutes ?? service.cleanDownMinutes;
+  const days = await readTherapistDays(ctx, therapist.id, site, dayOf(startsAt, site.zone));
+  if (!days) throw notFound("site");
+  const check = (room: { id?: string; name: string; siteId: string; kind: string }): void =>
+    refuseIf(
+      checkBooking({
+        ...{ startsAt, durationMinutes, cleanDownMinutes, now: ctx.clock.now(), graceMinutes },
+        ...{ site, room, service, therapist, working: days.working },
+        blocked: days.frame.absences.filter((a) => a.staffMemberId === therapist.id || a.roomId === room.id),
+        closedReason: days.site.closed.get(dayOf(startsAt, site.zone)),
+        overrideReason: wish.overrideReason ?? undefined,
+      }),
+    );
+  const endsAt = addMinutes(startsAt, durationMinutes);
+  if (setting.room) {
+    check(setting.room);
+    return { setting, room: setting.room, startsAt, endsAt, cleanDownMinutes };
+  }
+  check({ name: "any room", siteId: site.id, kind: service.roomKind });
+  const until = addMinutes(endsAt, cleanDownMinutes);
+  const room = await chooseRoom(ctx, days, service.roomKind, startsAt, until, wish.movingId);
+  return { setting, room, startsAt, endsAt, cleanDownMinutes };
+}
+
+/** Takes the plan's time for the visit. @throws refused `slot-taken` where someone else has any of it */
+export async function claimPlan(ctx: Context, appointmentId: string, plan: VisitPlan): Promise<void> {
+  const { setting, room, startsAt, endsAt, cleanDownMinutes } = plan;
+  const until = addMinutes(endsAt, cleanDownMinutes);
+  const claim = { appointmentId, therapistId: setting.therapist.id, roomId: room.id, startsAt, until };
+  if (await claimSlots(ctx, claim)) return;
+  const durationMinutes = minutesBetween(startsAt, endsAt);
+  const roomKind = setting.service.roomKind;
+  throw await slotTaken(ctx, { ...claim, site: setting.site, roomKind, durationMinutes, cleanDownMinutes });
+}

@@ -1,0 +1,66 @@
+import { newId } from "@withy/core/ids";
+import { appointmentChanges, type appointments } from "@withy/db/schema";
+import { recordAudit } from "../audit";
+import type { Context } from "../context";
+
+type Row = typeof appointments.$inferSelect;
+export type ChangeKind = (typeof appointmentChanges.$inferSelect)["kind"];
+
+/** What "recent changes" and undo need to know of a visit. */
+const shotOf = (row: Row): Record<string, unknown> => ({
+  state: row.state,
+  startsAt: row.startsAt.toISOString(),
+  endsAt: row.endsAt.toISOString(),
+  siteId: row.siteId,
+  therapistId: row.therapistId,
+  roomId: row.roomId,
+});
+
+const actions: Record<ChangeKind, string> = {
+  booked: "appointment.booked",
+  moved: "appointment.moved",
+  cancelled: "appointment.cancelled",
+  marked: "appointment.marked",
+  undone: "appointment.undone",
+};
+
+/**
+ * Writes down what was done to a visit, for the desk and for the audit, in the caller's transaction. A move between
+ * sites is told at both.
+ */
+export async function recordChange(
+  ctx: Context,
+  kind: ChangeKind,
+  before: Row | null,
+  after: Row,
+): Promise<void> {
+  const changedAt = ctx.clock.now();
+  const change = {
+    practiceId: ctx.practiceId,
+    appointmentId: after.id,
+    kind,
+    before: before ? shotOf(before) : null,
+    after: shotOf(after),
+    changedBy: ctx.staffMemberId,
+    changedAt,
+  };
+  const siteIds = new Set([before?.siteId ?? after.siteId, after.siteId]);
+  await ctx.db
+    .insert(appointmentChanges)
+    .values([...siteIds].map((siteId) => ({ ...change, id: newId(), siteId })));
+  const isMoved = before !== null && before.startsAt.getTime() !== after.startsAt.getTime();
+  await recordAudit(ctx, {
+    action: actions[kind],
+    subjectKind: "appointment",
+    subjectId: after.id,
+    patientId: after.patientId,
+    siteId: after.siteId,
+    detail: {
+      state: after.state,
+      startsAt: after.startsAt.toISOString(),
+      ...(before && before.state !== after.state ? { stateBefore: before.state } : {}),
+      ...(isMoved ? { startsAtBefore: before.startsAt.toISOString() } : {}),
+      ...(after.overrideReason !== null && kind !== "marked" ? { outsideHours: true } : {}),
+    },
+  });
+}

@@ -1,0 +1,59 @@
+import type { AppointmentMessagePayload, AppointmentTemplate } from "@withy/contracts/diary";
+import type { Context } from "../context";
+import { enqueueMessage } from "../messaging";
+import { isoOf } from "./raw-rows";
+import { readVisitRow, type VisitRow } from "./visit-row";
+
+function addressOf(row: VisitRow): string {
+  const lines = (
+    typeof row.address_lines === "string" ? JSON.parse(row.address_lines) : row.address_lines
+  ) as string[];
+  return [row.site_name, ...lines, row.site_postcode].join(", ");
+}
+
+function payloadOf(
+  ctx: Context,
+  row: VisitRow & { email: string },
+  previousStartsAt: Date | null,
+): AppointmentMessagePayload {
+  const place = addressOf(row);
+  return {
+    appointmentId: row.id,
+    version: row.version,
+    startsAt: isoOf(row.starts_at),
+    endsAt: isoOf(row.ends_at),
+    previousStartsAt: previousStartsAt?.toISOString() ?? null,
+    zone: row.zone,
+    practice: row.practice_name,
+    practiceEmail: row.practice_email,
+    contactLines: [row.site_phone, place],
+    phone: row.site_phone,
+    place,
+    withWhom: `with ${row.therapist_name}, ${row.job_title}`,
+    attendee: { name: row.patient_name, email: row.email },
+    greetingName: row.preferred_name ?? row.given_name,
+    noticeHours: row.notice_hours,
+    at: ctx.clock.now().toISOString(),
+  };
+}
+
+/** Puts an e-mail with its calendar file into the outbox, in the caller's transaction. Without an address: nothing. */
+export async function sendVisitMessage(
+  ctx: Context,
+  template: AppointmentTemplate,
+  appointmentId: string,
+  previousStartsAt: Date | null = null,
+): Promise<void> {
+  const row = await readVisitRow(ctx, appointmentId);
+  const { email } = row;
+  if (email === null || email === "") return;
+  await enqueueMessage(ctx, {
+    template,
+    toAddress: email,
+    payload: { ...payloadOf(ctx, { ...row, email }, previousStartsAt) },
+    aboutKind: "appointment",
+    aboutId: row.id,
+    patientId: row.patient_id,
+    dedupeKey: `${template}/${row.id}/${row.version}`,
+  });
+}
