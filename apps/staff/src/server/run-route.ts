@@ -124,10 +124,10 @@ export function problemResponse(error: unknown, requestId: string, method: strin
   });
 }
 
-/** Name, message and place of an error; a database error has already lost its statement and values. */
-function describe(error: unknown): Record<string, unknown> {
+/** Name, message and place of an error. A failed statement's own text carries every value, so only its number is told. */
+export function describe(error: unknown): Record<string, unknown> {
   if (!(error instanceof Error)) return { name: typeof error };
-  if (error.name === "DrizzleQueryError")
-    return { name: error.name, errno: (error.cause as { errno?: number } | undefined)?.errno };
+  if (error.cause instanceof Error && "errno" in error.cause)
+    return { name: "FailedStatement", errno: error.cause.errno };
   return { name: error.name, message: error.message, stack: error.stack };
 }

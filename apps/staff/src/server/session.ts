@@ -39,7 +39,7 @@ async function openSeal(token: string): Promise<string | null> {
   const content = await decode({ token, secret: env().WITHY_SECRET }).catch(() => null);
   if (!content?.sid) return null;
   if (opened.size > 2000) opened.clear();
-  opened.set(token, { sid: content.sid, until: (Number(content["exp"]) || 0) * 1000 });
+  opened.set(token, { sid: content.sid, until: (Number(content.exp) || 0) * 1000 });
   return content.sid;
 }
 

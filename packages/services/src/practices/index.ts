@@ -1,4 +1,5 @@
 export { chooseDeskSite } from "./choose-desk-site";
+export { foundPractice, foundPracticeInput } from "./found-practice";
 export { hasDemoAccounts } from "./has-demo-accounts";
 export { headCounts } from "./head-counts";
 export { listSites } from "./list-sites";
