@@ -17,7 +17,7 @@ function Row({ grey }: { grey: boolean }) {
     <ul className="guide-states" data-grey={grey ? "" : undefined}>
       {states.map((state) => (
         <li key={state.edge}>
-          <div className="block" data-edge={state.edge}>
+          <div className="timeblock" data-edge={state.edge}>
             <b>{state.edge === "hatch" ? "Supervision" : "Thandiwe Marsh"}</b>
             <StateMark code={state.edge} label={state.label} edge={state.edge} bare />
           </div>

@@ -8,6 +8,7 @@ import type {
   FoundTimesView,
   markAppointmentInput,
   moveAppointmentInput,
+  RecentChange,
   TherapistWeekView,
 } from "@withy/contracts/diary";
 import type { z } from "zod";
@@ -66,3 +67,6 @@ export const markAppointment = ({ appointmentId, ...input }: MarkAppointment) =>
 
 export const undoMark = ({ appointmentId, version }: AppointmentVersion) =>
   write<AppointmentView>("POST", `${visit(appointmentId)}/undo-mark`, { version });
+
+export const fetchChanges = (siteIds: readonly string[], limit: number, signal?: AbortSignal) =>
+  get<readonly RecentChange[]>("/api/diary/changes", { siteIds, limit }, signal);

@@ -9,4 +9,5 @@ export const diaryKeys = {
   appointment: (id: string) => ["diary", "appointment", id] as const,
   times: (wishes: object) => ["diary", "times", wishes] as const,
   choices: ["diary-choices"] as const,
+  changes: (siteIds: readonly string[]) => ["diary", "changes", siteIds] as const,
 };

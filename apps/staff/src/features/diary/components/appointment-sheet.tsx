@@ -12,6 +12,7 @@ import Link from "next/link";
 import { type ReactNode, useEffect, useRef } from "react";
 import { problemItems } from "@/api/form-problems";
 import { useAppointment } from "../hooks/use-appointment";
+import { phoneWords } from "../phone-words";
 import { SheetStates, type SheetVerbs } from "./sheet-states";
 
 export interface AppointmentSheetProps {
@@ -126,8 +127,8 @@ function When({ view }: { view: AppointmentView }) {
       </Row>
       {view.patient.phone && (
         <Row gutter="tel">
-          <a className="num" href={`tel:${view.patient.phone.replace(/\s/g, "")}`}>
-            {view.patient.phone}
+          <a className="num" href={`tel:${view.patient.phone}`}>
+            {phoneWords(view.patient.phone)}
           </a>
         </Row>
       )}

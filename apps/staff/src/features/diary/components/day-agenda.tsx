@@ -1,7 +1,7 @@
 "use client";
 import type { DayAppointment, DiaryDayView } from "@withy/contracts/diary";
 import { Choice } from "@withy/ui/choice";
-import { useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import { AppointmentStateMark, appointmentStateLook } from "@/components/appointment-state-mark";
 import { shownAppointments } from "../day-cursor";
 import { clock } from "../minute-words";
@@ -45,8 +45,15 @@ export function DayAgenda({ day, now, chosenId, onOpen }: DayAgendaProps) {
     })),
   ];
   const lines = linesOf(day, only, now);
+  const list = useRef<HTMLElement>(null);
+  // On a phone the list opens at the present; in a wide window it is not shown and nothing happens.
+  useEffect(() => {
+    const mark = list.current?.querySelector<HTMLElement>(".agendanow");
+    if (mark?.offsetParent && list.current)
+      list.current.scrollTop = mark.offsetTop - list.current.offsetTop - 160;
+  }, []);
   return (
-    <section className="dayagenda" aria-label="The day as a list">
+    <section ref={list} className="dayagenda" aria-label="The day as a list">
       <div className="agendawho">
         <Choice label="Whose day" options={options} value={only} onChange={setOnly} />
       </div>
@@ -87,7 +94,7 @@ function AgendaVisit({
       </span>
       <button
         type="button"
-        className="block agendavisit"
+        className="timeblock agendavisit"
         data-edge={appointmentStateLook(a.state).edge}
         aria-pressed={isChosen}
         onClick={() => onOpen(a)}

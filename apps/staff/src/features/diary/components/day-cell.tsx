@@ -47,7 +47,7 @@ export function AppointmentCell(props: AppointmentCellProps) {
     // biome-ignore lint/a11y/useKeyWithClickEvents: the grid handles Enter for its cells
     <div
       role="gridcell"
-      className={classNames("block daycell", isChosen && "chosen", props.isDragged && "dragged")}
+      className={classNames("timeblock daycell", isChosen && "chosen", props.isDragged && "dragged")}
       data-edge={appointmentStateLook(a.state).edge}
       data-appointment={a.id}
       style={isCancelled ? { ...position, height: cancelledPixels } : position}

@@ -19,6 +19,7 @@ import { DayDialogs, type OpenDialog } from "./day-dialogs";
 import { DayGrid } from "./day-grid";
 import { DaySheet } from "./day-sheet";
 import { DayTitle } from "./day-title";
+import { DiaryFoot } from "./diary-foot";
 
 export interface DayScreenProps {
   first: { filters: DayFilters; day: DiaryDayView };
@@ -124,6 +125,7 @@ export function DayScreen({ first, sites, today, may }: DayScreenProps) {
           onClose={close}
         />
       )}
+      <DiaryFoot siteIds={day.sites.map((site) => site.id)} canUndo={may.mark} />
       <DayDialogs
         dialog={dialog}
         day={day}

@@ -41,7 +41,7 @@ export function SheetStates({ view, verbs }: { view: AppointmentView; verbs: She
     <div className="part">
       <div className="r">
         <span>{happened(view)}</span>
-        <div className="statenow block" data-edge={appointmentStateLook(view.state).edge}>
+        <div className="statenow timeblock" data-edge={appointmentStateLook(view.state).edge}>
           <AppointmentStateMark code={view.state} bare />
         </div>
       </div>

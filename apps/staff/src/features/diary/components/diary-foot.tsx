@@ -1,0 +1,28 @@
+"use client";
+import { Tray } from "@withy/ui/tray";
+import dynamic from "next/dynamic";
+import { useState } from "react";
+import { useSiteChanges } from "../hooks/use-site-changes";
+
+const ChangesSheet = dynamic(() => import("./changes-sheet").then((m) => m.ChangesSheet));
+
+/** The strip at the foot: what was last done at these sites, and the list that it can be undone from. */
+export function DiaryFoot({ siteIds, canUndo }: { siteIds: readonly string[]; canUndo: boolean }) {
+  const [isOpen, setIsOpen] = useState(false);
+  const changes = useSiteChanges(siteIds).data ?? [];
+  const last = changes[0];
+  return (
+    <Tray
+      said={
+        <>
+          {last ? `${last.time} ${last.byName} ${last.what}. ` : "Nothing was changed here today. "}
+          <button type="button" className="linklike" onClick={() => setIsOpen(true)}>
+            Recent changes
+          </button>
+        </>
+      }
+    >
+      {isOpen && <ChangesSheet changes={changes} canUndo={canUndo} onClose={() => setIsOpen(false)} />}
+    </Tray>
+  );
+}
