@@ -1,0 +1,4 @@
+import { cancelCardPayment } from "@withy/services/billing";
+import { route } from "@/server/run-route";
+
+export const POST = route(cancelCardPayment);

@@ -1,0 +1,4 @@
+import { checkCardPayment } from "@withy/services/billing";
+import { route } from "@/server/run-route";
+
+export const POST = route(checkCardPayment);

@@ -1,0 +1,4 @@
+import { startCardPayment } from "@withy/services/billing";
+import { route } from "@/server/run-route";
+
+export const POST = route(startCardPayment, { status: 201 });

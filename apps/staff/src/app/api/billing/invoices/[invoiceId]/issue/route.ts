@@ -1,0 +1,4 @@
+import { issueInvoice } from "@withy/services/billing";
+import { route } from "@/server/run-route";
+
+export const POST = route(issueInvoice);

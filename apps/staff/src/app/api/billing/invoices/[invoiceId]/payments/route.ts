@@ -1,0 +1,4 @@
+import { takePayment } from "@withy/services/billing";
+import { route } from "@/server/run-route";
+
+export const POST = route(takePayment, { status: 201 });
