@@ -50,12 +50,7 @@ export function AppointmentSheet({ appointmentId, today, verbs, onMove, onClose 
       )}
       <div className="fin">
         {query.data && verbs.canBook && (
-          <ButtonLink
-            kind="primary"
-            as={Link}
-            href={`/diary/find?patient=${query.data.patient.id}`}
-            shortcut="B"
-          >
+          <ButtonLink kind="primary" as={Link} href={bookNextHref(query.data)} shortcut="B">
             Book next
           </ButtonLink>
         )}
@@ -70,6 +65,13 @@ export function AppointmentSheet({ appointmentId, today, verbs, onMove, onClose 
       </div>
     </aside>
   );
+}
+
+/** Another visit like this one; after a first assessment the caller says what it is for. */
+function bookNextHref(view: AppointmentView): string {
+  const query = new URLSearchParams({ patient: view.patient.id });
+  if (view.service.kind === "follow-up") query.set("service", view.service.id);
+  return `/diary/find?${query}`;
 }
 
 function Row({ gutter, children }: { gutter?: ReactNode; children: ReactNode }) {
