@@ -1,4 +1,5 @@
-import { exerciseLibrary, findExercise, searchExercises } from "@withy/clinical/exercises/library";
+import type { FormRef } from "@withy/clinical/exercises/exercise";
+import { exerciseLibrary, findExercise, findForm, searchExercises } from "@withy/clinical/exercises/library";
 import {
   type ExerciseLibraryView,
   type ExerciseView,
@@ -36,6 +37,13 @@ export const getExercise = verb(
       ...exercise,
       harderExercise: harder === null ? null : named(harder),
       easierExercises: easier.map(named),
+      alternativeName: alternativeName(exercise.withoutEquipment),
     };
   },
 );
+
+function alternativeName(ref: FormRef | null): string | null {
+  const other = ref === null ? null : findExercise(ref.exercise);
+  const form = ref === null ? null : findForm(ref.exercise, ref.form);
+  return other && form ? `${other.name}, ${form.name}` : null;
+}

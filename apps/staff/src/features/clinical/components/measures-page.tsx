@@ -1,0 +1,116 @@
+"use client";
+import type { ClinicalPatient, EpisodeSummary, MeasureSeriesView } from "@withy/contracts/clinical";
+import { ButtonLink } from "@withy/ui/button";
+import { ChoiceLinks } from "@withy/ui/choice";
+import { EmptyState } from "@withy/ui/empty-state";
+import { Page, PageBody, PageTitle } from "@withy/ui/page";
+import { SectionHead } from "@withy/ui/section-head";
+import Link from "next/link";
+import { useState } from "react";
+import { useMeasures } from "../hooks/use-measures";
+import { shortDay } from "../site-time";
+import { MeasureChart } from "./measure-chart";
+import { MeasurePanel } from "./measure-panel";
+import { MeasureWords } from "./measure-words";
+
+export interface MeasuresPageProps {
+  patient: ClinicalPatient;
+  episodes: readonly EpisodeSummary[];
+  episode: EpisodeSummary | null;
+  measures: MeasureSeriesView[];
+  canWrite: boolean;
+}
+
+/** Every measure of an episode over time, each scale with its chart and its words. */
+export function MeasuresPage({ patient, episodes, episode, measures, canWrite }: MeasuresPageProps) {
+  return (
+    <Page className="measures-page">
+      <PageTitle
+        title="Measures"
+        note={<Link href={`/patients/${patient.id}`}>{patient.name}</Link>}
+        lead={
+          episode === null
+            ? patient.name
+            : `${patient.name}, ${patient.age}. ${episode.place}, ${episode.problem}`
+        }
+        actions={
+          episodes.length > 1 && (
+            <ChoiceLinks
+              label="Episode"
+              as={Link}
+              items={episodes.map((one) => ({
+                href: `/patients/${patient.id}/measures?episode=${one.id}`,
+                label: `${one.place}, ${shortDay(one.openedOn)}`,
+                current: one.id === episode?.id,
+              }))}
+            />
+          )
+        }
+      />
+      {episode === null ? (
+        <PageBody>
+          <EmptyState
+            title="Nothing measured yet"
+            action={
+              <ButtonLink as={Link} href={`/patients/${patient.id}/episodes/new`}>
+                Open an episode
+              </ButtonLink>
+            }
+          >
+            Measures belong to an episode of care.
+          </EmptyState>
+        </PageBody>
+      ) : (
+        <EpisodeMeasures episodeId={episode.id} first={measures} canWrite={canWrite} />
+      )}
+    </Page>
+  );
+}
+
+function EpisodeMeasures({
+  episodeId,
+  first,
+  canWrite,
+}: {
+  episodeId: string;
+  first: MeasureSeriesView[];
+  canWrite: boolean;
+}) {
+  const measures = useMeasures(episodeId, first).data;
+  const [isRecording, setIsRecording] = useState(false);
+  return (
+    <div className="episode-columns">
+      <PageBody className="courses">
+        {measures.length === 0 && (
+          <EmptyState title="Nothing measured in this episode yet">Record the first one beside.</EmptyState>
+        )}
+        {measures.flatMap((series) =>
+          series.scales.map((scale) => (
+            <section key={`${series.measureKey} ${scale.scaleKey}`}>
+              <SectionHead
+                title={
+                  series.scales.length > 1
+                    ? `${series.shortLabel}, ${scale.label.toLowerCase()}`
+                    : series.label
+                }
+                aside={scale.better === "higher" ? "higher is better" : "lower is better"}
+              />
+              <MeasureChart scale={scale} title={`${series.shortLabel}, ${scale.label}`} />
+              <MeasureWords scale={scale} credit={series.credit} />
+            </section>
+          )),
+        )}
+      </PageBody>
+      <aside className="episode-side" aria-label="Record">
+        <MeasurePanel
+          episodeId={episodeId}
+          noteId={null}
+          measures={measures}
+          canRecord={canWrite}
+          isRecording={isRecording}
+          onRecording={setIsRecording}
+        />
+      </aside>
+    </div>
+  );
+}

@@ -1,0 +1,54 @@
+"use client";
+import { noteKindLabels } from "@withy/clinical/notes/headings";
+import { useState } from "react";
+import { AddendumDialog } from "./addendum-dialog";
+import { LastNote } from "./last-note";
+import { MeasurePanel } from "./measure-panel";
+import { NoteBar } from "./note-bar";
+import type { NoteParts } from "./note-page";
+import { SignedNote } from "./signed-note";
+
+/** A note that is read: signed, or someone else's draft. */
+export function ReadNote({ note, measures, day, visitDay, visitWords }: NoteParts) {
+  const [isAdding, setIsAdding] = useState(false);
+  const isSigned = note.state === "signed";
+  return (
+    <>
+      <section className="write" id="write" aria-label={noteKindLabels[note.kind]}>
+        <div className="write-title">
+          <h2>{noteKindLabels[note.kind]}</h2>
+          <span className="soft small num">{visitWords}</span>
+          <span className="grow" />
+          <b className="small">{isSigned ? "Signed" : `Draft by ${note.authorName}`}</b>
+        </div>
+        <SignedNote note={note} measures={measures} visitDay={visitDay} />
+      </section>
+      <aside className="beside" aria-label="Beside the note">
+        <LastNote
+          earlier={note.earlier}
+          episodeId={note.episode.id}
+          patientId={note.patient.id}
+          zone={note.zone}
+        />
+        <MeasurePanel
+          episodeId={note.episode.id}
+          noteId={null}
+          measures={measures}
+          canRecord={false}
+          isRecording={false}
+          onRecording={() => undefined}
+        />
+      </aside>
+      <NoteBar list={day} openNoteId={note.id}>
+        {isSigned ? (
+          <button type="button" className="sign" onClick={() => setIsAdding(true)}>
+            Add an addendum
+          </button>
+        ) : (
+          <span className="next soft">Only {note.authorName} may write here</span>
+        )}
+      </NoteBar>
+      {isAdding && <AddendumDialog note={note} onClose={() => setIsAdding(false)} />}
+    </>
+  );
+}

@@ -1,0 +1,48 @@
+import type { NoteView, StaleNote } from "@withy/contracts/clinical";
+import { useEffect, useState, useSyncExternalStore } from "react";
+import { ApiError } from "@/api/request";
+import { saveNoteDraft } from "../api-client";
+import { type KeeperPorts, NoteKeeper } from "../note-keeper";
+import { dropCopy, keepCopy, readCopy } from "../unsent-copy";
+
+function explain(error: unknown): ReturnType<KeeperPorts["explain"]> {
+  if (!(error instanceof ApiError))
+    return { sentence: "Something went wrong in this page. Reload it and try again." };
+  const { theirs } = error.problem.more as Partial<StaleNote>;
+  return error.status === 412 && theirs ? { theirs } : { sentence: error.problem.detail };
+}
+
+/** The text being written, with the keeper that saves it. */
+export function useNoteDraft(note: NoteView) {
+  const [keeper] = useState(
+    () =>
+      new NoteKeeper(note, {
+        save: saveNoteDraft,
+        explain,
+        copies: {
+          read: () => readCopy(note.id),
+          keep: (copy) => keepCopy(note.id, copy),
+          drop: () => dropCopy(note.id),
+        },
+      }),
+  );
+  const view = useSyncExternalStore(keeper.subscribe, keeper.current, keeper.current);
+  useEffect(() => {
+    keeper.restore();
+    const again = () => void keeper.flush();
+    const onHide = () => keeper.leave();
+    const onVisibility = () => document.visibilityState === "hidden" && again();
+    window.addEventListener("online", again);
+    window.addEventListener("pagehide", onHide);
+    document.addEventListener("visibilitychange", onVisibility);
+    return () => {
+      window.removeEventListener("online", again);
+      window.removeEventListener("pagehide", onHide);
+      document.removeEventListener("visibilitychange", onVisibility);
+      keeper.leave();
+    };
+  }, [keeper]);
+  return { ...view, keeper };
+}
+
+export type NoteDraft = ReturnType<typeof useNoteDraft>;
