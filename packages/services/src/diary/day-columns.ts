@@ -5,6 +5,7 @@ import { type Busy, freeIntervals, openIntervals, workingIntervals } from "@with
 import type { DayClock } from "@withy/diary/day-clock";
 import { dayClock, wallMinutes } from "@withy/diary/day-clock";
 import { type Interval, intersect, overlaps, totalMinutes } from "@withy/diary/interval";
+import { slotMinutes } from "@withy/diary/slots";
 import { isWorkedOn } from "@withy/diary/working-pattern";
 import { type DayVisit, dayAppointment } from "./day-appointments";
 import type { Frame, FrameAbsence, FrameSite } from "./frame";
@@ -20,6 +21,8 @@ export interface SiteDay {
   readonly from: number;
 }
 
+const slotMs = slotMinutes * 60_000;
+
 /** The day at each site of the frame, by the site's own clock. */
 export function siteDays(
   frame: Frame,
@@ -30,7 +33,7 @@ export function siteDays(
   return frame.sites.map((site) => {
     const clock = dayClock(day, site.zone);
     const ofDay = visits.filter((v) => v.from < clock.endsAt && v.to > clock.startsAt);
-    const from = Math.max(now.getTime(), clock.startsAt);
+    const from = Math.max(Math.ceil(now.getTime() / slotMs) * slotMs, clock.startsAt);
     return { site, clock, open: openOn(site, clock), frame, visits: ofDay, from };
   });
 }
