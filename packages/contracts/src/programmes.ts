@@ -93,6 +93,8 @@ export interface ExerciseView extends Exercise {
   /** The exercises whose ladders meet this one's ends. */
   readonly harderExercise: { readonly key: string; readonly name: string } | null;
   readonly easierExercises: readonly { readonly key: string; readonly name: string }[];
+  /** "Squat, a quarter of the way": what to do with nothing at home; null where no form needs anything. */
+  readonly alternativeName: string | null;
 }
 
 export interface ProgrammeVersionLine {

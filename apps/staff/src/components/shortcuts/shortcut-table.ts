@@ -132,6 +132,7 @@ export const shortcuts = [
   { id: "edit", keys: "e", label: "Edit the patient's details", group: "Patient" },
   { id: "sign", keys: "mod+enter", label: "Sign", group: "Note" },
   { id: "measure", keys: "r", label: "Record a measure", group: "Note" },
+  { id: "add-exercise", keys: "n", label: "Add an exercise", group: "Programme" },
   { id: "easier", keys: ",", label: "Easier form of the exercise", group: "Programme" },
   { id: "harder", keys: ".", label: "Harder form of the exercise", group: "Programme" },
 ] as const satisfies readonly Shortcut[];

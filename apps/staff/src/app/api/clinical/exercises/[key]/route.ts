@@ -1,0 +1,4 @@
+import { getExercise } from "@withy/services/clinical";
+import { route } from "@/server/run-route";
+
+export const GET = route(getExercise);

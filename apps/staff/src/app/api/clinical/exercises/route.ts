@@ -1,0 +1,4 @@
+import { getExerciseLibrary } from "@withy/services/clinical";
+import { route } from "@/server/run-route";
+
+export const GET = route(getExerciseLibrary);

@@ -1,0 +1,54 @@
+import { findExercise } from "@withy/clinical/exercises/library";
+import type { Programme } from "@withy/clinical/programmes/programme";
+import type { ProgrammeView } from "@withy/contracts/programmes";
+import { timeOf } from "@withy/core/zoned-time";
+import { useChanges } from "@withy/ui/recent-changes";
+import { useState } from "react";
+import { addExercise, changeItem, climb, moveItem, removeItem } from "../draft-changes";
+import { useProgrammeDraft } from "./use-programme-draft";
+
+/** The draft with the chosen line and everything that can be done to a line. */
+export function useBuilder(first: ProgrammeView) {
+  const kept = useProgrammeDraft(first);
+  const { announce } = useChanges();
+  const [chosenId, choose] = useState<string | null>(null);
+  const [ladderSays, setLadderSays] = useState<string | null>(null);
+  const programme = kept.draft.content;
+
+  const focusLine = (id: string | null) => {
+    if (id !== null) requestAnimationFrame(() => document.getElementById(`line-${id}`)?.focus());
+  };
+  const actions = {
+    choose,
+    change: (id: string, change: Parameters<typeof changeItem>[2]) =>
+      kept.change((p) => changeItem(p, id, change)),
+    climb: (id: string, way: "easier" | "harder") => {
+      const { programme: next, said } = climb(programme, id, way);
+      setLadderSays(said);
+      if (said === null) kept.change(() => next);
+    },
+    move: (id: string, to: number) => {
+      kept.change((p) => moveItem(p, id, to));
+      focusLine(id);
+    },
+    remove: (id: string) => {
+      const before: Programme = programme;
+      const index = before.items.findIndex((item) => item.id === id);
+      const name = findExercise(before.items[index]?.exercise ?? "")?.name ?? "A line";
+      kept.change((p) => removeItem(p, id));
+      choose(null);
+      focusLine(before.items[index + 1]?.id ?? before.items[index - 1]?.id ?? null);
+      const undo = async () => kept.change(() => before);
+      announce({ at: timeOf(new Date(), first.zone), said: `${name} removed from the programme`, undo });
+    },
+  };
+  const add = (exerciseKey: string) => {
+    const { programme: next, firstId } = addExercise(programme, exerciseKey, chosenId, () =>
+      crypto.randomUUID(),
+    );
+    kept.change(() => next);
+    choose(firstId);
+    focusLine(firstId);
+  };
+  return { kept, programme, chosenId, actions, add, ladderSays };
+}

@@ -1,0 +1,16 @@
+import { useMutation } from "@tanstack/react-query";
+import { useRef } from "react";
+import { issueProgramme } from "../api-client";
+
+export function useIssueProgramme() {
+  const key = useRef<string | null>(null);
+  return useMutation({
+    mutationFn: (input: { programmeId: string; version: number }) => {
+      key.current ??= crypto.randomUUID();
+      return issueProgramme(input, key.current);
+    },
+    onSettled: () => {
+      key.current = null;
+    },
+  });
+}
