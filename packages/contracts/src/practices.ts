@@ -10,4 +10,12 @@ export interface SiteView {
   readonly isStepFree: boolean;
 }
 
+export const listTherapistsInput = z.strictObject({});
+export interface TherapistView {
+  readonly id: string;
+  readonly name: string;
+  readonly jobTitle: string;
+  readonly homeSiteId: string;
+}
+
 export const chooseDeskSiteInput = z.strictObject({ siteId: idField });

@@ -113,7 +113,7 @@ describe("what is missing or wrong is said beside its field", () => {
       code: "invalid",
       fields: expect.arrayContaining([
         { field: "givenName", message: "Enter the given name." },
-        { field: "bornOn", message: "Enter a real date." },
+        { field: "bornOn", message: "Enter the date of birth as day, month and year." },
         { field: "phone", message: "Enter a phone number, or tick that there is none." },
         { field: "email", message: "Enter an e-mail address, or choose another way to reach the patient." },
         expect.objectContaining({ field: "nhsNumber" }),

@@ -1,8 +1,9 @@
 import { readNhsNumber } from "@withy/core/identifiers/nhs-number";
 import { readPhone } from "@withy/core/identifiers/phone";
 import { normalisePostcode } from "@withy/core/identifiers/postcode";
+import { isPlainDate } from "@withy/core/zoned-time";
 import { z } from "zod";
-import { idField, optionalText, penceField, plainDateField, requiredText, versionField } from "../fields";
+import { idField, optionalText, penceField, requiredText, versionField } from "../fields";
 
 export const preferredChannels = ["email", "text", "phone", "post"] as const;
 export type PreferredChannel = (typeof preferredChannels)[number];
@@ -62,7 +63,9 @@ const details = {
   givenName: requiredText(80, "Enter the given name."),
   familyName: requiredText(80, "Enter the family name."),
   preferredName: optionalText(80, "The preferred name"),
-  bornOn: plainDateField,
+  bornOn: z
+    .string("Enter the date of birth as day, month and year.")
+    .refine(isPlainDate, "Enter the date of birth as day, month and year."),
   sex: z
     .enum(sexes)
     .nullish()

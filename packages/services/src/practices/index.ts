@@ -3,6 +3,7 @@ export { foundPractice, foundPracticeInput } from "./found-practice";
 export { hasDemoAccounts } from "./has-demo-accounts";
 export { headCounts } from "./head-counts";
 export { listSites } from "./list-sites";
+export { listTherapists } from "./list-therapists";
 export { hashPassword, matchesPassword } from "./password";
 export { readSession, type SessionView } from "./read-session";
 export { absoluteHours, idleMinutes } from "./session-limits";

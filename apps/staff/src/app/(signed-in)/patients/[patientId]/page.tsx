@@ -1,0 +1,55 @@
+import type { PatientView, TimelineKind } from "@withy/contracts/patients";
+import { can } from "@withy/core/access/can";
+import type { Permission } from "@withy/core/access/permissions";
+import { plainDateWords } from "@withy/core/date-words";
+import { dayOf } from "@withy/core/zoned-time";
+import { getTimeline } from "@withy/services/patients";
+import type { Metadata } from "next";
+import { PatientFacts } from "@/features/patients/components/patient-facts";
+import { Timeline } from "@/features/patients/components/timeline";
+import { orNotFound, requireContext } from "@/server/context";
+import { openPatient } from "./open-patient";
+
+export const metadata: Metadata = { title: "Timeline" };
+
+const kinds: readonly { value: TimelineKind; label: string; permission: Permission }[] = [
+  { value: "all", label: "all", permission: "patients.read" },
+  { value: "visits", label: "visits", permission: "diary.read" },
+  { value: "notes", label: "notes", permission: "clinical.read" },
+  { value: "measures", label: "measures", permission: "clinical.read" },
+  { value: "letters", label: "letters", permission: "letters.read" },
+  { value: "money", label: "money", permission: "billing.read" },
+  { value: "messages", label: "messages", permission: "messaging.read" },
+];
+
+export default async function PatientPage({ params }: PageProps<"/patients/[patientId]">) {
+  const { patientId } = await params;
+  const ctx = await requireContext("patients.read");
+  const patient = await openPatient(patientId);
+  const first = await orNotFound(getTimeline(ctx, { patientId }));
+  const today = dayOf(ctx.clock.now(), ctx.zone);
+  const { title, aside } = headWords(patient);
+  return (
+    <div className="pcols">
+      <Timeline
+        patientId={patientId}
+        title={title}
+        aside={aside}
+        today={today}
+        first={first}
+        kinds={kinds.filter(({ permission }) => can(ctx.roles, permission))}
+      />
+      <PatientFacts patient={patient} today={today} />
+    </div>
+  );
+}
+
+function headWords({ clinical, registeredOn }: PatientView) {
+  const episode = clinical?.openEpisode;
+  return episode
+    ? {
+        title: `${episode.problem}, since ${plainDateWords(episode.openedOn)}`,
+        aside: `open episode, ${episode.therapistName}`,
+      }
+    : { title: "Timeline", aside: `registered ${plainDateWords(registeredOn)}` };
+}
