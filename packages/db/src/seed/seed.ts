@@ -1,13 +1,15 @@
 import { addDays, dayOf, instantAt } from "@withy/core/zoned-time";
 import { getTableName } from "drizzle-orm";
 import type { Connection } from "mysql2/promise";
-import { absences, practices } from "../schema";
+import { absences, episodes, practices } from "../schema";
 import { addDiary } from "./add-diary";
 import { addHouse } from "./add-house";
+import { addLetters } from "./add-letters";
 import { addMeasures } from "./add-measures";
 import { type Books, planBooks, writeBooks } from "./add-money";
 import { addNotes } from "./add-notes";
 import { addProgrammes } from "./add-programmes";
+import { addTrail } from "./add-trail";
 import { planEleri, tellEleri, wordsOfEleri } from "./eleri";
 import { type Leave, planDiary } from "./plan-diary";
 import { makeIds, makeRandom } from "./random";
@@ -65,7 +67,13 @@ function tell(stage: Stage, plan: PracticePlan): Books {
   addMeasures(stage, house, others, noteOf);
   addProgrammes(stage, house, others);
   if (eleri) tellEleri(stage, house, eleri.course, noteOf);
-  return planBooks(stage, house, courses);
+  const endedOn = new Map(
+    stage.rows.of(episodes).flatMap((row) => (row.dischargedAt ? [[row.id, row.dischargedAt] as const] : [])),
+  );
+  addLetters(stage, house, courses, endedOn);
+  const books = planBooks(stage, house, courses);
+  addTrail(stage, house, visits, books);
+  return books;
 }
 
 /** A week off for two people and a blocked hour, so that the diary has what a real one has. */
