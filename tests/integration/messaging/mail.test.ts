@@ -1,4 +1,4 @@
-import { startFakes } from "@withy/fakes/src/start-fakes";
+import { startFakes } from "@withy/fakes/start-fakes";
 import { type OutgoingMail, openMail } from "@withy/gateways/mail";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 

@@ -38,14 +38,21 @@ export function summary(facts: DischargeFacts): LetterSentence[] {
   );
 }
 
+/** "every day", "on three days a week", "14 times a week". */
+function oftenWords({ sessionsPerWeek }: ProgrammeFact): string {
+  if (sessionsPerWeek === 7) return "every day";
+  if (sessionsPerWeek > 7) return `${sessionsPerWeek} times a week`;
+  return `on ${numberWord(sessionsPerWeek)} ${sessionsPerWeek === 1 ? "day" : "days"} a week`;
+}
+
 function programmeWords(programme: ProgrammeFact): string {
-  const { exercises, rounds, sessionSeconds, daysPerWeek } = programme;
+  const { exercises, rounds, sessionSeconds } = programme;
   const minutes = Math.round(sessionSeconds / 60);
   const parts = [
     `Home programme of ${numberWord(exercises.length)} ${exercises.length === 1 ? "exercise" : "exercises"}`,
     rounds > 1 ? `${numberWord(rounds)} rounds` : "",
     `about ${minutes} ${minutes === 1 ? "minute" : "minutes"} a session`,
-    daysPerWeek === null ? "" : `on ${numberWord(daysPerWeek)} ${daysPerWeek === 1 ? "day" : "days"} a week`,
+    oftenWords(programme),
   ];
   return `${parts.filter((part) => part !== "").join(", ")}: ${listWords(exercises)}`;
 }
@@ -75,17 +82,13 @@ export function plan(facts: DischargeFacts): LetterSentence[] {
     ),
   );
   if (facts.programme) {
-    const { programmeId, on, daysPerWeek } = facts.programme;
-    const often =
-      daysPerWeek === null
-        ? ""
-        : ` on ${numberWord(daysPerWeek)} ${daysPerWeek === 1 ? "day" : "days"} a week`;
+    const { programmeId, on } = facts.programme;
     const label = `Programme, ${shortDate(on, facts.today)}`;
     sentences.push(
       assembled(
         "plan",
         "patient-programme",
-        `Keep up the home programme${often}`,
+        `Keep up the home programme ${oftenWords(facts.programme)}`,
         { kind: "programme", id: programmeId, label },
         "patient",
       ),

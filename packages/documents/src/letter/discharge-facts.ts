@@ -34,7 +34,7 @@ export interface ProgrammeFact {
   readonly rounds: number;
   /** Length of one session in seconds. */
   readonly sessionSeconds: number;
-  readonly daysPerWeek: number | null;
+  readonly sessionsPerWeek: number;
 }
 
 export interface RedFlagFacts {

@@ -93,7 +93,7 @@ export const hipFacts: DischargeFacts = {
     exercises: ["sit to stand", "bridge", "side step"],
     rounds: 2,
     sessionSeconds: 1200,
-    daysPerWeek: 3,
+    sessionsPerWeek: 3,
   },
   advice: [
     {

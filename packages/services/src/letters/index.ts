@@ -1,1 +1,10 @@
-export {};
+export { draftDischargeLetter } from "./draft-discharge-letter";
+export { getLetter } from "./get-letter";
+export { getLetterPdf } from "./get-letter-pdf";
+export { getLetterLink, openLinkedLetter } from "./letter-by-link";
+export { listLetters } from "./list-letters";
+export type { RenderedLetter } from "./printed-letter";
+export { saveLetter } from "./save-letter";
+export { sendLetter } from "./send-letter";
+export { settleSentence } from "./settle-sentence";
+export { signLetter } from "./sign-letter";
