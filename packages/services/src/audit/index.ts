@@ -1,1 +1,2 @@
+export { listAudit } from "./list-audit";
 export { type AuditEntry, recordAudit } from "./record-audit";

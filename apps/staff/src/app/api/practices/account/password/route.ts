@@ -1,0 +1,4 @@
+import { changePassword } from "@withy/services/practices";
+import { route } from "@/server/run-route";
+
+export const POST = route(changePassword);

@@ -1,0 +1,4 @@
+import { endSession } from "@withy/services/practices";
+import { route } from "@/server/run-route";
+
+export const DELETE = route(endSession);

@@ -1,0 +1,4 @@
+import { listMySessions } from "@withy/services/practices";
+import { route } from "@/server/run-route";
+
+export const GET = route(listMySessions);

@@ -1,0 +1,4 @@
+import { reactivateStaff } from "@withy/services/practices";
+import { route } from "@/server/run-route";
+
+export const POST = route(reactivateStaff);

@@ -1,0 +1,4 @@
+import { listTherapists } from "@withy/services/practices";
+import { route } from "@/server/run-route";
+
+export const GET = route(listTherapists);
