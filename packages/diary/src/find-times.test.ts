@@ -3,7 +3,7 @@ import { describe, expect, it } from "vitest";
 import { findTimes } from "./find-times";
 import type { FindTimesInput } from "./found-times";
 import type { Interval } from "./interval";
-import { dayScore, waitScore, weightsOf } from "./rank-time";
+import { bestScoreAfter, dayScore, totalScore, waitScore, weightsOf } from "./rank-time";
 
 const at = (text: string): Date => new Date(`2026-12-${text}:00Z`);
 const span = (a: string, b: string): Interval => ({ from: at(a).getTime(), to: at(b).getTime() });
@@ -168,6 +168,24 @@ describe("finding a time", () => {
 describe("what counts", () => {
   it("weighs the first of the order most and forgets none", () => {
     expect(weightsOf(["day"])).toEqual({ day: 0.4, wish: 0.3, wait: 0.2, knows: 0.1 });
+  });
+  it("knows the best that a later time can score", () => {
+    const part = fc.double({ min: 0, max: 1, noNaN: true });
+    const order = fc.shuffledSubarray(["wish", "wait", "knows", "day"] as const, { minLength: 0 });
+    fc.assert(
+      fc.property(
+        part,
+        part,
+        part,
+        fc.nat(80_000),
+        fc.nat(80_000),
+        order,
+        (wish, knows, day, after, more, first) => {
+          const score = totalScore({ wish, knows, day, wait: waitScore(after + more) }, weightsOf(first));
+          expect(score).toBeLessThanOrEqual(bestScoreAfter(after, first) + 1e-9);
+        },
+      ),
+    );
   });
   it("always prefers the sooner of two", () => {
     fc.assert(

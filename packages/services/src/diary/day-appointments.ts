@@ -47,7 +47,7 @@ export function dayAppointmentsSql(practiceId: string, scope: DayScope, from: Da
         )})`;
   const earliest = sqlTime(new Date(from.getTime() - 24 * 3_600_000));
   return sql`
-    select a.id, a.version, a.state, a.starts_at, a.ends_at, a.clean_down_minutes, a.site_id,
+    select straight_join a.id, a.version, a.state, a.starts_at, a.ends_at, a.clean_down_minutes, a.site_id,
       a.therapist_id, concat(t.given_name, ' ', t.family_name) as therapist_name,
       a.room_id, r.name as room_name,
       a.patient_id, concat(p.given_name, ' ', p.family_name) as patient_name,
@@ -70,7 +70,7 @@ export async function readDayVisits(
   to: Date,
 ): Promise<DayVisit[]> {
   const rows = await rowsOf<DayRow>(ctx.db, dayAppointmentsSql(ctx.practiceId, scope, from, to));
-  return rows.map((row) => ({ ...row, from: utc(row.starts_at), to: utc(row.ends_at) }));
+  return rows.map((row) => Object.assign(row, { from: utc(row.starts_at), to: utc(row.ends_at) }));
 }
 
 /** Lays a visit on the clock of its day. */

@@ -1,10 +1,11 @@
 import { type FoundTimesView, type FoundTimeView, findTimesInput } from "@withy/contracts/diary";
 import { notFound, refused } from "@withy/core/errors";
 import { refusal } from "@withy/core/refusal";
-import { addDays, dayBounds, dayOf, timeOf } from "@withy/core/zoned-time";
+import { addDays, dayBounds, dayOf, minutesBetween, timeOf } from "@withy/core/zoned-time";
 import { patients, services, serviceTherapists } from "@withy/db/schema";
 import { findTimes as rankTimes } from "@withy/diary/find-times";
 import type { FindTimesInput, FoundTime } from "@withy/diary/found-times";
+import { bestScoreAfter } from "@withy/diary/rank-time";
 import { and, eq, sql } from "drizzle-orm";
 import type { z } from "zod";
 import type { Context } from "../context";
@@ -18,6 +19,7 @@ type Input = z.output<typeof findTimesInput>;
 type SeenBy = { therapistId: string; name: string; visits: number; lastOn: string }[];
 
 const daysAhead = 56;
+const nearDays = 14;
 /** Looked at beyond the latest date asked for, so that a later date can be proposed. */
 const daysBeyond = 14;
 
@@ -111,25 +113,25 @@ async function shortestSellable(ctx: Context): Promise<number> {
   return Math.min(...rows.map((r) => r.length + r.after), 480);
 }
 
-/** The best times for a visit over therapists, rooms and sites, each with why it ranks there; or why there is none. */
-export const findTimes = verb("diary.book", findTimesInput, async (ctx, input): Promise<FoundTimesView> => {
-  const began = performance.now();
-  const service = await loadRecord(ctx, services, input.serviceId, "service");
-  const window = windowOf(ctx, input);
-  const [siteIds, seenBy, shortestSellableMinutes, therapistIds] = await Promise.all([
-    searchedSites(ctx, input),
-    readSeenBy(ctx, input.patientId),
-    shortestSellable(ctx),
-    therapistsFor(ctx, service.id),
-  ]);
-  const { durationMinutes, cleanDownMinutes, roomKind } = service;
+interface Search {
+  readonly service: typeof services.$inferSelect;
+  readonly siteIds: readonly string[];
+  readonly therapistIds: readonly string[];
+  readonly shortestSellableMinutes: number;
+  readonly seenBy: SeenBy;
+}
+
+async function searchWindow(ctx: Context, input: Input, s: Search, window: Window) {
+  const { durationMinutes, cleanDownMinutes, roomKind } = s.service;
+  const { siteIds, therapistIds, shortestSellableMinutes } = s;
+  const movingId = input.movingId ?? null;
   const lanes = await readFreeLanes(ctx, {
     ...window,
     siteIds,
     therapistIds,
     roomKind,
     cleanDownMinutes,
-    movingId: input.movingId ?? null,
+    movingId,
   });
   const search: FindTimesInput = {
     ...{
@@ -141,17 +143,50 @@ export const findTimes = verb("diary.book", findTimesInput, async (ctx, input): 
       ...lanes,
     },
     wishes: wishesOf(input),
-    seenBy: seenBy.map((s, n) => ({ therapistId: s.therapistId, visits: s.visits, isLast: n === 0 })),
+    seenBy: s.seenBy.map(({ therapistId, visits }, n) => ({ therapistId, visits, isLast: n === 0 })),
     order: input.order,
     limit: input.limit,
   };
-  const found = rankTimes(search);
+  return { search, found: rankTimes(search) };
+}
+
+/**
+ * Searches the first fortnight and stops there when nothing later could come among the best; else the whole window.
+ * The answer is the same, since a later time's best possible score is known.
+ */
+async function searchAll(ctx: Context, input: Input, s: Search, window: Window) {
+  const near = dayBounds(addDays(dayOf(window.from, ctx.zone), nearDays), ctx.zone).from;
+  if (near < window.to) {
+    const first = await searchWindow(ctx, input, s, { from: window.from, to: near });
+    const worst = first.found.times[input.limit - 1];
+    const isSettled = first.found.meetingEveryWish > 0 && worst !== undefined;
+    const later = bestScoreAfter(minutesBetween(window.from, near), input.order);
+    if (isSettled && worst.score >= later) return first;
+  }
+  return searchWindow(ctx, input, s, window);
+}
+
+/** The best times for a visit over therapists, rooms and sites, each with why it ranks there; or why there is none. */
+export const findTimes = verb("diary.book", findTimesInput, async (ctx, input): Promise<FoundTimesView> => {
+  const began = performance.now();
+  const service = await loadRecord(ctx, services, input.serviceId, "service");
+  const window = windowOf(ctx, input);
+  const [siteIds, seenBy, shortestSellableMinutes, therapistIds] = await Promise.all([
+    searchedSites(ctx, input),
+    readSeenBy(ctx, input.patientId),
+    shortestSellable(ctx),
+    therapistsFor(ctx, service.id),
+  ]);
+  const settings = { service, siteIds, therapistIds, shortestSellableMinutes, seenBy };
+  const { search, found } = await searchAll(ctx, input, settings, window);
+  const { lookedAt, meetingEveryWish, none } = found;
+  const tookMs = Math.round(performance.now() - began);
   return {
     times: found.times.map((t) => viewOf(search, t)),
-    lookedAt: found.lookedAt,
-    meetingEveryWish: found.meetingEveryWish,
-    tookMs: Math.round(performance.now() - began),
-    none: found.none,
+    lookedAt,
+    meetingEveryWish,
+    tookMs,
+    none,
     seenBy,
   };
 });

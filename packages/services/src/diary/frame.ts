@@ -4,6 +4,7 @@ import { bankHolidayOn, type Nation } from "@withy/diary/bank-holidays";
 import type { WorkingPattern } from "@withy/diary/working-pattern";
 import { type SQL, sql } from "drizzle-orm";
 import type { Context } from "../context";
+import { laterChange, latestChangesSql } from "./latest-changes";
 import { rowsOf, utc } from "./raw-rows";
 
 /** What a stretch of days looks like before anyone is booked: sites, rooms, people's hours, leave and blocks. */
@@ -12,6 +13,8 @@ export interface Frame {
   readonly rooms: readonly FrameRoom[];
   readonly patterns: readonly FramePattern[];
   readonly absences: readonly FrameAbsence[];
+  /** The latest change at any of the sites, where it was asked for. */
+  readonly pulse: string | null;
 }
 
 export interface FrameSite {
@@ -53,6 +56,7 @@ export interface FrameQuery {
   readonly siteIds: readonly string[];
   /** Absent: everyone who works at these sites. */
   readonly therapistIds?: readonly string[];
+  readonly withPulse?: boolean;
 }
 
 const list = (values: readonly (string | number)[]): SQL =>
@@ -95,11 +99,12 @@ function frameSql(practiceId: string, q: FrameQuery): SQL {
     union all select 'absence', json_object('id', a.id, 'staffMemberId', a.staff_member_id, 'roomId', a.room_id, 'kind', a.kind,
         'reason', a.reason, 'startsAt', a.starts_at, 'endsAt', a.ends_at)
       from absences a where a.practice_id = ${practiceId} and a.ends_at > ${from} and a.starts_at < ${until}
-        and a.room_id in (select r.id from rooms r where r.practice_id = ${practiceId} and r.site_id in (${sites}))`;
+        and a.room_id in (select r.id from rooms r where r.practice_id = ${practiceId} and r.site_id in (${sites}))
+    ${q.withPulse ? sql`union all select 'pulse', json_object('id', l.id) from (${latestChangesSql(practiceId, q.siteIds)}) l` : sql``}`;
 }
 
 interface RawRow {
-  kind: "site" | "hours" | "closure" | "room" | "pattern" | "absence";
+  kind: "site" | "hours" | "closure" | "room" | "pattern" | "absence" | "pulse";
   data: string | object;
 }
 
@@ -145,7 +150,8 @@ function absenceOf(data: Raw): FrameAbsence {
 export async function readFrame(ctx: Context, q: FrameQuery): Promise<Frame> {
   const sites = new Map<string, FrameSite>();
   const [rooms, patterns, absences]: [FrameRoom[], FramePattern[], FrameAbsence[]] = [[], [], []];
-  if (q.siteIds.length === 0) return { sites: [], rooms, patterns, absences };
+  let pulse: string | null = null;
+  if (q.siteIds.length === 0) return { sites: [], rooms, patterns, absences, pulse };
   for (const row of await rowsOf<RawRow>(ctx.db, frameSql(ctx.practiceId, q))) {
     const data = (typeof row.data === "string" ? JSON.parse(row.data) : row.data) as Raw;
     if (row.kind === "site") {
@@ -157,9 +163,11 @@ export async function readFrame(ctx: Context, q: FrameQuery): Promise<Frame> {
     else if (row.kind === "closure") sites.get(data.siteId)?.closed.set(data.on, data.reason);
     else if (row.kind === "room") rooms.push(data);
     else if (row.kind === "pattern") patterns.push(data as unknown as FramePattern);
-    else absences.push(absenceOf(data));
+    else if (row.kind === "absence") absences.push(absenceOf(data));
+    else pulse = laterChange(pulse, data.id);
   }
   rooms.sort((a, b) => a.position - b.position);
   patterns.sort((a, b) => a.position - b.position);
-  return { sites: [...sites.values()].sort((a, b) => a.position - b.position), rooms, patterns, absences };
+  const inOrder = [...sites.values()].sort((a, b) => a.position - b.position);
+  return { sites: inOrder, rooms, patterns, absences, pulse };
 }

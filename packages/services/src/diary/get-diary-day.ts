@@ -6,7 +6,6 @@ import { verb } from "../verb";
 import { readDayVisits } from "./day-appointments";
 import { daySite, gridBounds, roomColumns, siteDays, therapistColumns } from "./day-columns";
 import { readFrame } from "./frame";
-import { readPulse } from "./get-diary-pulse";
 import { readableSites } from "./site-reach";
 
 /** A gap on the day's list is one that a visit would fit into. */
@@ -23,10 +22,9 @@ export const getDiaryDay = verb("diary.read", getDiaryDayInput, async (ctx, inpu
     from: new Date(`${addDays(day, -1)}T00:00:00Z`),
     to: new Date(`${addDays(day, 2)}T00:00:00Z`),
   };
-  const [frame, visits, pulse] = await Promise.all([
-    readFrame(ctx, { firstDay: day, lastDay: day, siteIds }),
+  const [frame, visits] = await Promise.all([
+    readFrame(ctx, { firstDay: day, lastDay: day, siteIds, withPulse: true }),
     readDayVisits(ctx, { siteIds }, wide.from, wide.to),
-    readPulse(ctx, siteIds),
   ]);
   if (frame.sites.length < siteIds.length) throw notFound("site");
   const days = siteDays(frame, visits, day, now);
@@ -49,6 +47,6 @@ export const getDiaryDay = verb("diary.read", getDiaryDayInput, async (ctx, inpu
       gaps: columns.flatMap((c) => c.free).filter((f) => f.untilMinute - f.fromMinute >= shortestGapMinutes)
         .length,
     },
-    pulse,
+    pulse: frame.pulse,
   };
 });

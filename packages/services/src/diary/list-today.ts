@@ -7,7 +7,6 @@ import { verb } from "../verb";
 import { readDayVisits } from "./day-appointments";
 import { type SiteDay, siteDays, therapistColumns } from "./day-columns";
 import { readFrame } from "./frame";
-import { readPulse } from "./get-diary-pulse";
 import { readableSites } from "./site-reach";
 import { readArrivals, toCollect } from "./today-arrivals";
 
@@ -59,10 +58,9 @@ export const listToday = verb("diary.read", listTodayInput, async (ctx, input): 
     from: new Date(now.getTime() - 36 * 3_600_000),
     to: new Date(now.getTime() + 36 * 3_600_000),
   };
-  const [frame, visits, pulse] = await Promise.all([
-    readFrame(ctx, { firstDay: day, lastDay: day, siteIds }),
+  const [frame, visits] = await Promise.all([
+    readFrame(ctx, { firstDay: day, lastDay: day, siteIds, withPulse: true }),
     readDayVisits(ctx, { siteIds }, wide.from, wide.to),
-    readPulse(ctx, siteIds),
   ]);
   if (frame.sites.length < siteIds.length) throw notFound("site");
   const days = siteDays(frame, visits, day, now);
@@ -83,6 +81,6 @@ export const listToday = verb("diary.read", listTodayInput, async (ctx, input): 
     gapMinutes: gaps.reduce((sum, g) => sum + g.minutes, 0),
     toCollect: seesMoney ? await toCollect(ctx, lines) : null,
     counts: countsOf(lines),
-    pulse,
+    pulse: frame.pulse,
   };
 });
