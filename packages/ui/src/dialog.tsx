@@ -1,6 +1,6 @@
 "use client";
 import { Dialog as Base } from "@base-ui/react/dialog";
-import type { ReactNode, RefObject } from "react";
+import { type ReactNode, type RefObject, useRef } from "react";
 import { Button } from "./button";
 
 export interface DialogProps {
@@ -24,11 +24,21 @@ export interface DialogProps {
 export function Dialog(props: DialogProps) {
   const { open, onOpenChange, title, lead, place = "centre", size = "usual", actions, children } = props;
   const blocking = place === "centre";
+  const popup = useRef<HTMLDivElement>(null);
+  // A question is answered in its first field, not on a link beside it; without a field the first verb is at hand.
+  const firstField = () =>
+    popup.current?.querySelector<HTMLElement>("input:not([type=hidden]), select, textarea") ?? true;
   return (
     <Base.Root open={open} onOpenChange={onOpenChange} modal={blocking} disablePointerDismissal={!blocking}>
       <Base.Portal>
         {blocking && <Base.Backdrop className="veil" />}
-        <Base.Popup className="dlg" data-place={place} data-size={size} initialFocus={props.initialFocus}>
+        <Base.Popup
+          className="dlg"
+          data-place={place}
+          data-size={size}
+          ref={popup}
+          initialFocus={props.initialFocus ?? firstField}
+        >
           <Base.Title>{title}</Base.Title>
           {lead && <Base.Description className="lead">{lead}</Base.Description>}
           <div className="content">{children}</div>
