@@ -77,6 +77,8 @@ export const sendLetterInput = z.strictObject({
   /** The recipient of the letter, or a copy for the patient. */
   to: z.enum(["recipient", "patient"]),
   channel: z.enum(["email", "print"]),
+  /** Another address than the one on record, for this sending only. */
+  email: emailField,
 });
 export type SendLetterInput = z.input<typeof sendLetterInput>;
 

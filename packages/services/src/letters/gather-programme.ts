@@ -1,4 +1,4 @@
-import { findForm } from "@withy/clinical/exercises/library";
+import { findExercise } from "@withy/clinical/exercises/library";
 import { sessionTime } from "@withy/clinical/programmes/compute-time";
 import { dayOf } from "@withy/core/zoned-time";
 import { programmes, programmeVersions } from "@withy/db/schema";
@@ -34,7 +34,7 @@ export async function programmeFact(
     .limit(1);
   if (!row?.version.issuedAt) return null;
   const content = contentOf(row.version);
-  const names = content.items.flatMap((item) => findForm(item.exercise, item.form)?.name.toLowerCase() ?? []);
+  const names = content.items.flatMap((item) => findExercise(item.exercise)?.name.toLowerCase() ?? []);
   return {
     programmeId: row.version.programmeId,
     on: dayOf(row.version.issuedAt, zone),

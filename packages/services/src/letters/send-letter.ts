@@ -97,9 +97,15 @@ export const sendLetter = verb(
       // Post and hand are always open to the patient: it is their letter.
       const asksConsent = input.to === "recipient" || input.channel === "email";
       const isRefusedByPatient = asksConsent && (await isWithdrawn(tx, letter.patientId, reader.consent));
-      const { email, whose } = reader;
+      const email = input.email ?? reader.email;
       refuseIf(
-        checkSend({ state: letter.state, channel: input.channel, address: email, whose, isRefusedByPatient }),
+        checkSend({
+          state: letter.state,
+          channel: input.channel,
+          address: email,
+          whose: reader.whose,
+          isRefusedByPatient,
+        }),
       );
       const { zone } = await loadSite(tx, episode.siteId);
       const id = newId();

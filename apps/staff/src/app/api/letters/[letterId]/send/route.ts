@@ -1,0 +1,4 @@
+import { sendLetter } from "@withy/services/letters";
+import { route } from "@/server/run-route";
+
+export const POST = route(sendLetter);
