@@ -2,22 +2,16 @@
 import { isAppError } from "@withy/core/errors";
 import { chooseDeskSite, signIn, signOut } from "@withy/services/practices";
 import { revalidatePath } from "next/cache";
-import { cookies, headers } from "next/headers";
+import { cookies } from "next/headers";
 import { redirect } from "next/navigation";
+import { checkActionOrigin } from "./action-origin";
 import { addressOf, signInLimits } from "./auth";
 import { requireSession } from "./context";
-import { checkOrigin } from "./run-route";
 import { sealSession, sessionCookieName, sessionCookieOptions, systemContext } from "./session";
 
 export interface SignInState {
   email: string;
   problem: string | null;
-}
-
-async function checkActionOrigin(): Promise<Headers> {
-  const sent = new Headers(await headers());
-  checkOrigin(new Request("http://withy.invalid", { headers: sent }));
-  return sent;
 }
 
 /** The sign-in form; works before any script has loaded. */

@@ -1,6 +1,13 @@
 import "server-only";
 import { isAppError } from "@withy/core/errors";
-import { createSignInLimits, readSession, type SignInLimits, signIn } from "@withy/services/practices";
+import {
+  createResetLimits,
+  createSignInLimits,
+  type ResetLimits,
+  readSession,
+  type SignInLimits,
+  signIn,
+} from "@withy/services/practices";
 import type { AuthOptions } from "next-auth";
 import Credentials from "next-auth/providers/credentials";
 import { database } from "./database";
@@ -13,6 +20,13 @@ let limits: SignInLimits | undefined;
 export function signInLimits(): SignInLimits {
   limits ??= createSignInLimits(database(), new URL(env().DATABASE_URL).pathname.slice(1));
   return limits;
+}
+
+let forgotten: ResetLimits | undefined;
+
+export function resetLimits(): ResetLimits {
+  forgotten ??= createResetLimits(database(), new URL(env().DATABASE_URL).pathname.slice(1));
+  return forgotten;
 }
 
 /** The browser's address as the nearest proxy saw it; on one machine there is none and all share one. */

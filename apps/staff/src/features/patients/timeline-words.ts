@@ -1,3 +1,9 @@
+import {
+  type MessageState,
+  type MessageTemplate,
+  messageStateWords,
+  messageTemplateWords,
+} from "@withy/contracts/messaging";
 import type { MessageEntry, TimelineEntry, VisitEntry } from "@withy/contracts/patients";
 import { formatMoney } from "@withy/core/money";
 import { dayAndYear } from "./short-day";
@@ -62,9 +68,10 @@ function visitWords(entry: VisitEntry): EntryWords {
 }
 
 function messageWords(entry: MessageEntry): EntryWords {
+  const name = messageTemplateWords[entry.template as MessageTemplate] ?? "Message";
   return {
-    title: messages[entry.template] ?? "Message",
-    detail: messageStates[entry.state] ?? "",
+    title: `${name}, by e-mail`,
+    detail: messageStateWords[entry.state as MessageState] ?? "",
     href: null,
   };
 }
@@ -77,20 +84,4 @@ const invoiceStates: Record<string, string> = {
   paid: "Paid",
   void: "Void",
   refunded: "Refunded",
-};
-
-const messages: Record<string, string> = {
-  "booking-confirmed": "Confirmation of the appointment",
-  "booking-moved": "New time of the appointment",
-  "booking-cancelled": "Cancellation of the appointment",
-  invoice: "Invoice by e-mail",
-  letter: "Letter by e-mail",
-};
-
-const messageStates: Record<string, string> = {
-  waiting: "Waiting to be sent",
-  claimed: "Being sent",
-  sent: "Sent",
-  failed: "Could not be sent",
-  dropped: "Not sent, no longer needed",
 };

@@ -11,18 +11,17 @@ export default async function SignInPage({ searchParams }: PageProps<"/sign-in">
   const query = await searchParams;
   const from = typeof query["from"] === "string" ? query["from"] : "";
   return (
-    <PlainPage
-      title="Sign in"
-      lead={
-        query["left"] === "1"
-          ? "You have signed out. Close the browser if others use this computer."
-          : undefined
-      }
-    >
+    <PlainPage title="Sign in" lead={leadWords(query)}>
       <SignInForm from={from} />
       <p>
         <a href="/forgot">I forgot my password</a>
       </p>
     </PlainPage>
   );
+}
+
+function leadWords(query: Record<string, string | string[] | undefined>): string | undefined {
+  if (query["left"] === "1") return "You have signed out. Close the browser if others use this computer.";
+  if (query["ready"] !== undefined) return "Your password is set. Sign in with it.";
+  return undefined;
 }

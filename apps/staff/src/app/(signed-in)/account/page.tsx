@@ -1,0 +1,23 @@
+import "@/features/practices/practices.css";
+import { listMySessions } from "@withy/services/practices";
+import { Page, PageBody, PageTitle } from "@withy/ui/page";
+import type { Metadata } from "next";
+import { PasswordChange } from "@/features/practices/components/password-change";
+import { SessionList } from "@/features/practices/components/session-list";
+import { requireSession } from "@/server/context";
+
+export const metadata: Metadata = { title: "Your sign-in" };
+
+export default async function AccountPage() {
+  const { context, jobTitle, practiceName } = await requireSession();
+  const sessions = await listMySessions(context, {});
+  return (
+    <Page>
+      <PageTitle title="Your sign-in" lead={`${context.staffName}, ${jobTitle} at ${practiceName}`} />
+      <PageBody className="stacked">
+        <SessionList first={sessions} zone={context.zone} />
+        <PasswordChange zone={context.zone} />
+      </PageBody>
+    </Page>
+  );
+}

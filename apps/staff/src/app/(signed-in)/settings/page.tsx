@@ -1,0 +1,38 @@
+import "@/features/practices/practices.css";
+import { getPracticeSettings, listStaff } from "@withy/services/practices";
+import { ButtonLink } from "@withy/ui/button";
+import { Page, PageBody, PageTitle } from "@withy/ui/page";
+import type { Metadata } from "next";
+import Link from "next/link";
+import { PracticeSettings } from "@/features/practices/components/practice-settings";
+import { StaffList } from "@/features/practices/components/staff-list";
+import { requireContext } from "@/server/context";
+
+export const metadata: Metadata = { title: "Settings" };
+
+export default async function SettingsPage() {
+  const ctx = await requireContext("practice.manage");
+  const [settings, staff] = await Promise.all([getPracticeSettings(ctx, {}), listStaff(ctx, {})]);
+  return (
+    <Page>
+      <PageTitle
+        title="Settings"
+        lead={`${settings.legalName}. ${settings.vatNumber ? `VAT ${settings.vatNumber}` : "Not registered for VAT"}. Late with less than ${settings.noticeHours} hours' notice`}
+        actions={
+          <ButtonLink size="small" href="/settings/audit" as={Link}>
+            Who did what
+          </ButtonLink>
+        }
+      />
+      <PageBody className="stacked settingspage">
+        <StaffList
+          first={staff}
+          sites={settings.sites.map(({ id, name }) => ({ id, name }))}
+          zone={ctx.zone}
+          selfId={ctx.staffMemberId}
+        />
+        <PracticeSettings settings={settings} />
+      </PageBody>
+    </Page>
+  );
+}
