@@ -41,7 +41,7 @@ describe("issuing an invoice", () => {
       "invoice.drafted",
       "invoice.issued",
     ]);
-    expect(first.steps.map((s) => s.said)).toEqual(["Drafted from 1 visit", "Issued as MP-00001"]);
+    expect(first.steps.map((s) => s.said)).toEqual(["Drafted", "Issued as MP-00001, £52.00"]);
   });
 
   it("numbers 20 at once without a gap and without a repeat", async () => {
