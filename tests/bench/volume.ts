@@ -129,7 +129,7 @@ export async function fillVolume(connection: Connection, plan: VolumePlan): Prom
 
 async function fillPatients(connection: Connection, plan: VolumePlan, p: string): Promise<void> {
   const n = "(seq - 1)";
-  const phone = "CONCAT('+447', LPAD(seq * 37 % 1000000000, 9, '0'))";
+  const phone = "CONCAT('+447700900', LPAD(seq * 37 % 1000, 3, '0'))";
   await connection.query(`INSERT INTO patients (practice_id, id, given_name, family_name, born_on, phone, email, address_lines, postcode, nhs_number, home_site_id, name_last_first, name_first_last, phone_reversed, created_at, updated_at)
     SELECT '${p}', ${volumeIdSql("patient", n)}, ${choose(given, n)}, ${family(n)}, DATE_ADD('1935-01-01', INTERVAL seq * 13 % 28000 DAY), ${phone}, CONCAT('p', seq, '@post.example'),
       '["2 Short Street"]', 'ZZ1 1AB', CONCAT('999', LPAD(seq, 7, '0')), ${volumeIdSql("site", `MOD(${n}, ${plan.sites})`)},
