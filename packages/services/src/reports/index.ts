@@ -1,1 +1,2 @@
-export {};
+export { getMonth } from "./get-month";
+export { listFigureRows } from "./list-figure-rows";
