@@ -28,7 +28,10 @@ export interface FigureDrawing {
   readonly arc: { readonly d: string; readonly head: string } | null;
 }
 
-const show = (value: number) => String(Math.round(value * 10) / 10);
+/** One decimal place: engines differ in the last digit of a sine, and server and browser must draw the same. */
+const rounded = (value: number) => Math.round(value * 10) / 10;
+const show = (value: number) => String(rounded(value));
+const circle = (p: Point): Circle => ({ x: rounded(p.x), y: rounded(p.y), r: skeleton.headRadius });
 const at = (p: Point) => `${show(p.x)} ${show(p.y)}`;
 const line = (...points: Point[]) => points.map((p, i) => `${i === 0 ? "M" : "L"}${at(p)}`).join("");
 
@@ -79,7 +82,7 @@ function ghostStrokes(figure: Figure): { strokes: Stroke[]; head: Circle } {
   ];
   return {
     strokes: paths.map((d) => ({ d, width: 1.3 })),
-    head: { ...body.head, r: skeleton.headRadius },
+    head: circle(body.head),
   };
 }
 
@@ -147,7 +150,7 @@ function bodyLayers(pose: Pose, view: Figure["view"]) {
       ...legStrokes(body, "near", [5.6, 4.3, 3.4]),
       { d: line(body.shoulder, body.neck), width: 3.6 },
     ],
-    head: { ...body.head, r: skeleton.headRadius },
+    head: circle(body.head),
     nearArm: { d: armLine(body, "near"), width: 3.5 },
   };
 }

@@ -1,7 +1,8 @@
 "use client";
 import type { Programme, ProgrammeMode } from "@withy/clinical/programmes/programme";
 import type { ProgrammeView } from "@withy/contracts/programmes";
-import { timeOf } from "@withy/core/zoned-time";
+import { shortDate } from "@withy/core/date-words";
+import { dayOf, timeOf } from "@withy/core/zoned-time";
 import { Choice } from "@withy/ui/choice";
 import { PageTitle } from "@withy/ui/page";
 import Link from "next/link";
@@ -20,6 +21,14 @@ const stateWords = {
   clash: "not saved",
 } as const;
 
+/** The time for today, the day for anything earlier. */
+function savedWords(savedAt: string, zone: string): string {
+  const at = new Date(savedAt);
+  const day = dayOf(at, zone);
+  const today = dayOf(new Date(), zone);
+  return day === today ? timeOf(at, zone) : shortDate(day, today);
+}
+
 /** Patient, side and saved time are never out of sight. */
 export function BuilderHead({
   view,
@@ -32,11 +41,9 @@ export function BuilderHead({
   programme: Programme;
   onMode: (mode: ProgrammeMode) => void;
 }) {
-  const savedAt = kept.seen.versions[0]?.savedAt;
+  const line = view.versions.find((one) => one.versionNumber === view.versionNumber);
   const said =
-    kept.state === "saved" && savedAt
-      ? `saved ${timeOf(new Date(savedAt), view.zone)}`
-      : stateWords[kept.state];
+    kept.state === "saved" && line ? `saved ${savedWords(line.savedAt, view.zone)}` : stateWords[kept.state];
   return (
     <PageTitle
       title={<Link href={`/patients/${view.patient.id}/programme`}>{view.patient.name}</Link>}

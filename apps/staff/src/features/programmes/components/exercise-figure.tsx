@@ -10,7 +10,6 @@ function Strokes({ of, className }: { of: readonly Stroke[]; className: string }
   return (
     <g className={className}>
       {of.map((stroke, i) => (
-        // biome-ignore lint/suspicious/noArrayIndexKey: a drawing's strokes never change their order
         <path key={i} d={stroke.d} strokeWidth={stroke.width} />
       ))}
     </g>

@@ -4,6 +4,7 @@ import type { ExerciseView } from "@withy/contracts/programmes";
 import { AlertLine } from "@withy/ui/alert-line";
 import { SectionHead } from "@withy/ui/section-head";
 import Link from "next/link";
+import { Fragment, type ReactNode } from "react";
 import { ExerciseFigure } from "./exercise-figure";
 import { ExerciseLadder } from "./exercise-ladder";
 
@@ -27,7 +28,7 @@ export function ExerciseSheet({ exercise }: { exercise: ExerciseView }) {
           title={`${exercise.name}: movement over the dotted start`}
         />
       </div>
-      <section aria-labelledby="how">
+      <section className="how" aria-labelledby="how">
         <SectionHead title="How to do it" id="how" />
         <p className="purpose serif">{exercise.purpose}</p>
         <p>
@@ -39,18 +40,18 @@ export function ExerciseSheet({ exercise }: { exercise: ExerciseView }) {
           ))}
         </ol>
       </section>
-      <section aria-labelledby="care">
+      <section className="care" aria-labelledby="care">
         <SectionHead title="Usual cautions" id="care" />
         {exercise.cautions.map((caution) => (
           <AlertLine key={caution}>{caution}</AlertLine>
         ))}
         <p className="small soft">Local policy and the clinician's judgement come first.</p>
       </section>
-      <section aria-labelledby="ladder">
+      <section className="ladder" aria-labelledby="ladder">
         <SectionHead title="Ladder, easiest first" id="ladder" />
         <ExerciseLadder exercise={exercise} />
       </section>
-      <section aria-labelledby="facts">
+      <section className="dose" aria-labelledby="facts">
         <SectionHead title="Dose and support" id="facts" />
         <Facts exercise={exercise} />
       </section>
@@ -60,7 +61,7 @@ export function ExerciseSheet({ exercise }: { exercise: ExerciseView }) {
 
 function Facts({ exercise }: { exercise: ExerciseView }) {
   const { dose, withoutEquipment } = exercise;
-  const facts: [string, React.ReactNode][] = [
+  const facts: [string, ReactNode][] = [
     ["Timed", `${range(dose.workSeconds, " s")} of work`],
     ["Sets", `${range(dose.sets)} of ${range(dose.repetitions)}`],
     ...(dose.holdSeconds[1] > 0 ? [["Hold", range(dose.holdSeconds, " s")] as [string, string]] : []),
@@ -75,16 +76,16 @@ function Facts({ exercise }: { exercise: ExerciseView }) {
             <Link key="instead" href={`/exercises/${withoutEquipment.exercise}`}>
               {exercise.alternativeName}
             </Link>,
-          ] as [string, React.ReactNode],
+          ] as [string, ReactNode],
         ]),
   ];
   return (
     <dl className="facts">
       {facts.map(([name, value]) => (
-        <div key={name}>
+        <Fragment key={name}>
           <dt>{name}</dt>
           <dd className="num">{value}</dd>
-        </div>
+        </Fragment>
       ))}
     </dl>
   );

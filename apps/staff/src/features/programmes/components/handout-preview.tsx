@@ -15,7 +15,7 @@ export function HandoutPreview({ view, programme }: { view: ProgrammeView; progr
         </span>
       </header>
       <h2>{paper.title}</h2>
-      <p className="summary">{paper.summary}</p>
+      <p className="session">{paper.summary}</p>
       <ol>
         {paper.entries.map((entry) => (
           <li key={entry.number}>

@@ -17,17 +17,25 @@ type Count =
   | "holdSeconds"
   | "restBetweenSetsSeconds";
 
-const counts: Record<"timed" | "sets", readonly { name: Count; label: string }[]> = {
+interface CountField {
+  readonly name: Count;
+  /** Said to readers, since the words around the box are split by it. */
+  readonly label: string;
+  readonly before: string;
+  readonly after: string;
+}
+
+const counts: Record<"timed" | "sets", readonly CountField[]> = {
   timed: [
-    { name: "workSeconds", label: "work, s" },
-    { name: "restSeconds", label: "rest, s" },
+    { name: "workSeconds", label: "seconds of work", before: "work", after: "s" },
+    { name: "restSeconds", label: "seconds of rest", before: "rest", after: "s" },
   ],
   sets: [
-    { name: "sets", label: "sets" },
-    { name: "repetitions", label: "repetitions" },
-    { name: "repetitionSeconds", label: "s each" },
-    { name: "holdSeconds", label: "s hold" },
-    { name: "restBetweenSetsSeconds", label: "s rest" },
+    { name: "sets", label: "sets", before: "", after: "sets" },
+    { name: "repetitions", label: "repetitions", before: "of", after: "" },
+    { name: "repetitionSeconds", label: "seconds a repetition", before: "at", after: "s each" },
+    { name: "holdSeconds", label: "seconds of hold", before: "hold", after: "s" },
+    { name: "restBetweenSetsSeconds", label: "seconds between sets", before: "rest", after: "s" },
   ],
 };
 
@@ -54,15 +62,16 @@ export function ItemEditor({ programme, item, index, actions, name }: ItemLinePr
   return (
     <section className="item-editor" aria-label={`Details of ${index + 1}. ${name}`}>
       <div className="counts num">
-        {counts[programme.mode].map(({ name: field, label }) => (
+        {counts[programme.mode].map(({ name: field, label, before, after }) => (
           <span className="count" key={field}>
+            <span aria-hidden="true">{before}</span>
             <NumberBox
               label={`${name}: ${label}`}
               value={item[field]}
               onChange={(value) => set({ [field]: value })}
               className="number-box small"
             />
-            <span aria-hidden="true">{label}</span>
+            <span aria-hidden="true">{after}</span>
           </span>
         ))}
       </div>

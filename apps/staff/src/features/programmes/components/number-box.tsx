@@ -31,7 +31,7 @@ export function NumberBox({
       type="text"
       inputMode="numeric"
       autoComplete="off"
-      size={Math.max(2, text.length || 1)}
+      size={Math.max(1, text.length)}
       aria-label={label}
       aria-invalid={isWrong || (!isWhole && text !== "" && text !== given) || undefined}
       placeholder={value === null ? "…" : undefined}

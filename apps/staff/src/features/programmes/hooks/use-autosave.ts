@@ -9,7 +9,6 @@ export function useAutosave(
   { isHeld, hasFailed, save }: { isHeld: boolean; hasFailed: boolean; save: () => void },
 ): void {
   const { draft, isDirty } = changed;
-  // biome-ignore lint/correctness/useExhaustiveDependencies: each new draft starts the wait again
   useEffect(() => {
     if (!isDirty || isHeld) return;
     const timer = setTimeout(save, hasFailed ? retryMs : idleMs);
