@@ -23,6 +23,7 @@ export default defineConfig({
         },
       },
       {
+        resolve: { alias: { "@/": `${import.meta.dirname}/apps/staff/src/` } },
         test: {
           name: "ui-jsdom",
           environment: "jsdom",

@@ -19,6 +19,7 @@ import { DayLanes, DayRail, place, top } from "./day-rail";
 
 export interface DayGridProps {
   day: DiaryDayView;
+  today: string;
   now: number | null;
   cursor: Cursor;
   onCursor: (cursor: Cursor) => void;
@@ -100,7 +101,7 @@ export function DayGrid(props: DayGridProps) {
       aria-colcount={day.columns.length + 1}
       onKeyDown={onKeyDown}
     >
-      <DayHead day={day} onColumns={props.onColumns} />
+      <DayHead day={day} today={props.today} onColumns={props.onColumns} />
       <div
         className="daybody"
         style={{ height: (day.bounds.untilMinute - day.bounds.fromMinute) * pixelsPerMinute }}

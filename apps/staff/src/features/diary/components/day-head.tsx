@@ -3,20 +3,24 @@ import type { DayColumn, DiaryDayView } from "@withy/contracts/diary";
 import { Button } from "@withy/ui/button";
 import { shortClock, span } from "../minute-words";
 
-function hoursWords(column: DayColumn): string {
+function hoursWords(column: DayColumn, isOver: boolean): string {
   const first = column.hours[0];
   const last = column.hours.at(-1);
   if (!first || !last) return column.blocks.find((b) => b.kind === "leave")?.reason ?? "not here today";
+  const hours = `${shortClock(first.fromMinute)} to ${shortClock(last.untilMinute)}`;
+  if (isOver) return hours;
   const free = column.freeMinutes > 0 ? `${span(column.freeMinutes)} free` : "full";
-  return `${shortClock(first.fromMinute)} to ${shortClock(last.untilMinute)}, ${free}`;
+  return `${hours}, ${free}`;
 }
 
 /** Names of the columns, with their hours and what is still free. */
 export function DayHead({
   day,
+  today,
   onColumns,
 }: {
   day: DiaryDayView;
+  today: string;
   onColumns: (by: "therapist" | "room") => void;
 }) {
   const other = day.by === "therapist" ? "room" : "therapist";
@@ -45,7 +49,7 @@ export function DayHead({
             <b>{column.name}</b>
             <span className="soft">
               {day.sites.length > 1 && `${day.sites.find((site) => site.id === column.siteId)?.name ?? ""}, `}
-              {hoursWords(column)}
+              {hoursWords(column, day.day < today)}
             </span>
           </div>
         ))}

@@ -102,6 +102,7 @@ export function DayScreen({ first, sites, today, may }: DayScreenProps) {
         <>
           <DayGrid
             day={day}
+            today={today}
             now={now}
             cursor={cursor}
             onCursor={setCursor}

@@ -71,6 +71,7 @@ export function WeekCalendar({ week, today, onOpen }: WeekCalendarProps) {
         view="week"
         views={["week"]}
         toolbar={false}
+        drilldownView={null}
         date={at(monday, 720)}
         onView={() => {}}
         onNavigate={() => {}}

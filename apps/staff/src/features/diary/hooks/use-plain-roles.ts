@@ -12,10 +12,16 @@ export function usePlainRoles(box: RefObject<HTMLElement | null>): void {
     if (!root) return;
     const strip = () => {
       for (const element of root.querySelectorAll(tableRoles)) element.removeAttribute("role");
+      for (const element of root.querySelectorAll("[aria-sort]")) element.removeAttribute("aria-sort");
     };
     strip();
     const observer = new MutationObserver(strip);
-    observer.observe(root, { childList: true, subtree: true, attributes: true, attributeFilter: ["role"] });
+    observer.observe(root, {
+      childList: true,
+      subtree: true,
+      attributes: true,
+      attributeFilter: ["role", "aria-sort"],
+    });
     return () => observer.disconnect();
   }, [box]);
 }
