@@ -47,6 +47,23 @@ function refuseSharedPorts(ports) {
   }
 }
 
+/** Real use has no stand-ins: what the demonstration fakes must be named. */
+function requireRealServices(env) {
+  const needed = [
+    "WITHY_URL",
+    "WITHY_SMTP_HOST",
+    "WITHY_SMTP_PORT",
+    "WITHY_MAIL_FROM",
+    "WITHY_CARD_KEY",
+    "WITHY_CARD_WEBHOOK_SECRET",
+  ];
+  const missing = needed.filter((name) => !env[name]);
+  if (missing.length === 0) return;
+  throw new StartError(
+    `WITHY_DEMO is 0, so Withy needs the real services. Set these in .env: ${missing.join(", ")}.`,
+  );
+}
+
 const newSecret = () => randomBytes(32).toString("base64url");
 
 /** Made once for each data folder, so that no secret is ever committed and two clones never share one. */
@@ -76,6 +93,8 @@ export function readSettings(environment = process.env, envFile = join(root, ".e
       `WITHY_DEMO is "${env.WITHY_DEMO}". Use 1 for the demonstration practice or 0 for real use.`,
     );
   }
+  const demo = env.WITHY_DEMO !== "0";
+  if (!demo) requireRealServices(env);
   const url = env.WITHY_URL ?? `http://localhost:${ports.WITHY_PORT}`;
   if (!URL.canParse(url))
     throw new StartError(`WITHY_URL is "${url}". Give a whole address such as https://withy.example.`);
@@ -86,7 +105,7 @@ export function readSettings(environment = process.env, envFile = join(root, ".e
     fakesPort: ports.WITHY_FAKES_PORT,
     smtpPort: ports.WITHY_SMTP_PORT,
     dataDir: resolve(root, env.WITHY_DATA_DIR ?? ".withy"),
-    demo: env.WITHY_DEMO !== "0",
+    demo,
     url: url.replace(/\/+$/, ""),
   };
 }

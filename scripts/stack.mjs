@@ -40,7 +40,7 @@ export async function seedDemo(settings, secrets) {
   return lastLines(output, 1).trim();
 }
 
-/** Starts the app, the worker and, where hosted services are stood in for, the stand-ins. */
+/** Starts the app, the worker and, for the demonstration, the stand-ins for hosted services. */
 export function startPrograms(settings, secrets, { isDev = false } = {}) {
   const env = appEnvironment(settings, secrets, isDev ? "development" : "production");
   const logDir = join(settings.dataDir, "logs");
@@ -65,7 +65,7 @@ export function startPrograms(settings, secrets, { isDev = false } = {}) {
       },
     ),
     typescript("worker"),
-    typescript("fakes"),
+    ...(settings.demo ? [typescript("fakes")] : []),
   ];
 }
 

@@ -26,13 +26,9 @@ async function refuseSecondStart({ dataDir, url }) {
   forgetRunning(dataDir);
 }
 
-async function checkPorts({ port, dbPort, fakesPort, smtpPort }) {
-  const wanted = {
-    WITHY_PORT: port,
-    WITHY_DB_PORT: dbPort,
-    WITHY_FAKES_PORT: fakesPort,
-    WITHY_SMTP_PORT: smtpPort,
-  };
+async function checkPorts({ port, dbPort, fakesPort, smtpPort, demo }) {
+  const standIns = demo ? { WITHY_FAKES_PORT: fakesPort, WITHY_SMTP_PORT: smtpPort } : {};
+  const wanted = { WITHY_PORT: port, WITHY_DB_PORT: dbPort, ...standIns };
   for (const [name, number] of Object.entries(wanted)) {
     if (await isPortFree(number)) continue;
     throw new StartError(
@@ -52,6 +48,7 @@ function sayReady({ url, fakesPort, demo, dataDir }) {
     console.log("  owner@cairnfirth.example     the owner of another practice");
     console.log(`\nMail, texts and card payments stay on this machine: http://localhost:${fakesPort}`);
   }
+  if (!demo) console.log("The first practice is founded with npm run found, which says what it needs.");
   console.log(`Logs are in ${join(dataDir, "logs")}. Ctrl-C stops everything.`);
 }
 

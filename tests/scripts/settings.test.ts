@@ -42,6 +42,26 @@ test.each([
   expect(() => readSettings(env, noFile)).toThrow(words);
 });
 
+test("real use names every service that the demonstration stands in for", () => {
+  expect(() => readSettings({ WITHY_DEMO: "0" }, noFile)).toThrow(
+    "WITHY_URL, WITHY_SMTP_HOST, WITHY_SMTP_PORT, WITHY_MAIL_FROM, WITHY_CARD_KEY, WITHY_CARD_WEBHOOK_SECRET",
+  );
+  const real = {
+    WITHY_DEMO: "0",
+    WITHY_URL: "https://withy.example/",
+    WITHY_SMTP_HOST: "mail.example",
+    WITHY_SMTP_PORT: "587",
+    WITHY_MAIL_FROM: "post@withy.example",
+    WITHY_CARD_KEY: "sk_live_x",
+    WITHY_CARD_WEBHOOK_SECRET: "whsec_x",
+  };
+  expect(readSettings(real, noFile)).toMatchObject({
+    demo: false,
+    url: "https://withy.example",
+    smtpPort: 587,
+  });
+});
+
 test.each([
   ["20.19.0", true],
   ["20.18.9", false],
