@@ -48,7 +48,8 @@ function sayReady({ url, fakesPort, demo, dataDir }) {
     console.log("  owner@cairnfirth.example     the owner of another practice");
     console.log(`\nMail, texts and card payments stay on this machine: http://localhost:${fakesPort}`);
   }
-  if (!demo) console.log("The first practice is laid down with npm run new-practice, which says what it needs.");
+  if (!demo)
+    console.log("The first practice is laid down with npm run new-practice, which says what it needs.");
   console.log(`Logs are in ${join(dataDir, "logs")}. Ctrl-C stops everything.`);
 }
 
