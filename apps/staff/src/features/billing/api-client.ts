@@ -6,7 +6,6 @@ import type {
   InvoiceListView,
   InvoiceView,
   ListInvoicesInput,
-  PatientAccountView,
   ProductView,
   refundPaymentInput,
   StartedCardPaymentView,
@@ -42,9 +41,6 @@ export const fetchInvoice = (id: string, signal?: AbortSignal) => get<InvoiceVie
 
 export const fetchProducts = (id: string, signal?: AbortSignal) =>
   get<ProductView[]>(`${invoice(id)}/products`, {}, signal);
-
-export const fetchPatientAccount = (patientId: string, signal?: AbortSignal) =>
-  get<PatientAccountView>(`/api/billing/patients/${patientId}/account`, {}, signal);
 
 export const draftVisits = (wish: { patientId?: string }) =>
   write<DraftedView>("POST", "/api/billing/drafts", wish);

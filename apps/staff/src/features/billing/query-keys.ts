@@ -1,6 +1,6 @@
 import type { InvoiceFilters } from "./api-client";
 
-/** Every write invalidates `all`: one invoice stands in the lists, in the sums, on its own page and in an account. */
+/** Every write invalidates `all`: one invoice stands in the lists, in the sums and on its own page. */
 export const billingKeys = {
   all: ["billing"] as const,
   invoices: (filters: InvoiceFilters) => ["billing", "invoices", filters] as const,
@@ -8,5 +8,4 @@ export const billingKeys = {
   toIssue: ["billing", "to-issue"] as const,
   invoice: (id: string) => ["billing", "invoice", id] as const,
   products: (id: string) => ["billing", "products", id] as const,
-  account: (patientId: string) => ["billing", "account", patientId] as const,
 };

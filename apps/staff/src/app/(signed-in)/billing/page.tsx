@@ -6,6 +6,7 @@ import { AccountsScreen } from "@/features/billing/components/accounts-screen";
 import { readFilterAddress, toListInput } from "@/features/billing/filter-address";
 import { orNotFound, requireContext } from "@/server/context";
 import "@/features/billing/accounts.css";
+import "@/features/billing/accounts-narrow.css";
 
 export const metadata: Metadata = { title: "Accounts" };
 

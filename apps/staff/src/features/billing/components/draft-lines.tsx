@@ -13,6 +13,7 @@ export interface KeptLine {
 }
 
 interface DraftLinesProps {
+  today: string;
   lines: readonly InvoiceLineView[];
   busy: boolean;
   onChange: (lines: KeptLine[]) => void;
@@ -37,7 +38,7 @@ function read(text: LineText): { quantity: number; discountBasisPoints: number }
 }
 
 /** Quantity and discount of each line, and a way to take the line off. */
-export function DraftLines({ lines, busy, onChange }: DraftLinesProps) {
+export function DraftLines({ today, lines, busy, onChange }: DraftLinesProps) {
   const [texts, setTexts] = useState<Record<string, LineText>>({});
   const now = lines.map((line) => ({ line, text: texts[line.id] ?? textOf(line) }));
   const kept = now.flatMap(({ line, text }) => {
@@ -56,7 +57,7 @@ export function DraftLines({ lines, busy, onChange }: DraftLinesProps) {
             <p>
               {line.description}
               {line.kind === "visit" && line.on !== null && (
-                <span className="soft small num"> {shortDate(line.on)}</span>
+                <span className="soft small num"> {shortDate(line.on, today)}</span>
               )}
             </p>
             <div className="linefields">

@@ -8,9 +8,9 @@ import { problemItems } from "@/api/form-problems";
 import { useShortcut } from "@/components/shortcuts/shortcut-provider";
 import { invoicePdfAddress } from "../api-client";
 import { useDiscardDraft, useEditDraft, useIssueInvoice } from "../hooks/use-draft-writes";
+import type { InvoiceRights } from "../invoice-rights";
 import { AddItem } from "./add-item";
 import { DraftLines } from "./draft-lines";
-import type { InvoiceRights } from "./invoice-screen";
 
 /** Changes a draft and issues it. Each change is saved and added up at once, so the page beside it is what goes out. */
 export function DraftPanel({ invoice, may }: { invoice: InvoiceView; may: InvoiceRights }) {
@@ -46,6 +46,7 @@ export function DraftPanel({ invoice, may }: { invoice: InvoiceView; may: Invoic
       {may.draft && (
         <>
           <DraftLines
+            today={invoice.today}
             lines={invoice.lines}
             busy={isBusy}
             onChange={(lines) => edit.mutate({ ...version, lines })}

@@ -52,7 +52,7 @@ export function DraftsScreen({ first, today, may }: DraftsScreenProps) {
           )
         }
       />
-      <div aria-live="polite" className="body">
+      <div aria-live="polite" className="body issuing">
         {issue.done && `Issuing ${issue.done.count + 1} of ${issue.done.of}`}
         {issue.problems.map((p) => (
           <AlertLine key={p.draftId} tone="danger">

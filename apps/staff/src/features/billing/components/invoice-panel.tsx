@@ -4,7 +4,7 @@ import { Button } from "@withy/ui/button";
 import { useEffect, useState } from "react";
 import { invoicePdfAddress } from "../api-client";
 import { useCardPayment } from "../hooks/use-card-payment";
-import type { InvoiceRights } from "./invoice-screen";
+import type { InvoiceRights } from "../invoice-rights";
 import { MoneyTaken } from "./money-taken";
 import { OpenCardPayment } from "./open-card-payment";
 import { PaymentForm } from "./payment-form";

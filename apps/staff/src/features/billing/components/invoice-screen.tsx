@@ -2,17 +2,11 @@
 import type { InvoiceView } from "@withy/contracts/billing";
 import { Page } from "@withy/ui/page";
 import { useInvoice } from "../hooks/use-invoice";
+import type { InvoiceRights } from "../invoice-rights";
 import { DraftPanel } from "./draft-panel";
 import { InvoiceFolio } from "./invoice-folio";
 import { InvoiceHistory } from "./invoice-history";
 import { InvoicePanel } from "./invoice-panel";
-
-export interface InvoiceRights {
-  draft: boolean;
-  issue: boolean;
-  takePayment: boolean;
-  refund: boolean;
-}
 
 interface InvoiceScreenProps {
   first: InvoiceView;

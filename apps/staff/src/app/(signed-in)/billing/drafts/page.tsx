@@ -5,6 +5,7 @@ import type { Metadata } from "next";
 import { DraftsScreen } from "@/features/billing/components/drafts-screen";
 import { requireContext } from "@/server/context";
 import "@/features/billing/accounts.css";
+import "@/features/billing/accounts-narrow.css";
 
 export const metadata: Metadata = { title: "To issue" };
 

@@ -6,6 +6,7 @@ import { cache } from "react";
 import { InvoiceScreen } from "@/features/billing/components/invoice-screen";
 import { orNotFound, requireContext } from "@/server/context";
 import "@/features/billing/invoice.css";
+import "@/features/billing/invoice-narrow.css";
 import "@/features/billing/payment.css";
 
 type Props = PageProps<"/billing/invoices/[invoiceId]">;
