@@ -1,4 +1,5 @@
 import { createServer, type Server } from "node:http";
+import { dayBounds } from "@withy/core/zoned-time";
 import { dayAppointmentsSql } from "@withy/services/diary/day-appointments";
 import { MySqlDialect } from "drizzle-orm/mysql-core";
 import mysql from "mysql2/promise";
@@ -11,8 +12,7 @@ export async function startBareServer(
   day: string,
 ) {
   const pool = mysql.createPool({ uri: url, timezone: "Z", connectionLimit: 4 });
-  const from = new Date(new Date(`${day}T00:00:00Z`).getTime() - 86_400_000);
-  const to = new Date(from.getTime() + 3 * 86_400_000);
+  const { from, to } = dayBounds(day, "Europe/London");
   const { sql, params } = new MySqlDialect().sqlToQuery(
     dayAppointmentsSql(practiceId, { siteIds }, from, to),
   );

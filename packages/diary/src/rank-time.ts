@@ -27,9 +27,12 @@ export function waitScore(minutes: number): number {
   return Math.exp(-Math.max(0, minutes) / (12 * 1440));
 }
 
-/** No time that many minutes on or later can score more than this, however good it is otherwise. */
-export function bestScoreAfter(minutes: number, order: readonly RankConcern[]): number {
-  return totalScore({ wish: 1, wait: waitScore(minutes), knows: 1, day: 1 }, weightsOf(order));
+/**
+ * No time that many minutes on or later can score more than this, however good it is otherwise.
+ * @param wish the best wish score that such a time can have
+ */
+export function bestScoreAfter(minutes: number, order: readonly RankConcern[], wish = 1): number {
+  return totalScore({ wish, wait: waitScore(minutes), knows: 1, day: 1 }, weightsOf(order));
 }
 
 /** @param visits with this therapist; @param isLast whether they gave the patient's last visit */

@@ -1,11 +1,9 @@
 import { type DiaryDayView, getDiaryDayInput } from "@withy/contracts/diary";
-import { notFound } from "@withy/core/errors";
-import { addDays, dayOf } from "@withy/core/zoned-time";
+import { dayOf } from "@withy/core/zoned-time";
 import { stateFacts } from "@withy/diary/appointment-states";
 import { verb } from "../verb";
-import { readDayVisits } from "./day-appointments";
-import { daySite, gridBounds, roomColumns, siteDays, therapistColumns } from "./day-columns";
-import { readFrame } from "./frame";
+import { daySite, gridBounds, roomColumns, therapistColumns } from "./day-columns";
+import { readSiteDays } from "./read-site-days";
 import { readableSites } from "./site-reach";
 
 /** A gap on the day's list is one that a visit would fit into. */
@@ -17,17 +15,7 @@ export const getDiaryDay = verb("diary.read", getDiaryDayInput, async (ctx, inpu
   const now = ctx.clock.now();
   const today = dayOf(now, ctx.zone);
   const day = input.day ?? today;
-  // Sites may lie in zones of their own; a day either side of the practice's covers them all.
-  const wide = {
-    from: new Date(`${addDays(day, -1)}T00:00:00Z`),
-    to: new Date(`${addDays(day, 2)}T00:00:00Z`),
-  };
-  const [frame, visits] = await Promise.all([
-    readFrame(ctx, { firstDay: day, lastDay: day, siteIds, withPulse: true }),
-    readDayVisits(ctx, { siteIds }, wide.from, wide.to),
-  ]);
-  if (frame.sites.length < siteIds.length) throw notFound("site");
-  const days = siteDays(frame, visits, day, now);
+  const { frame, days } = await readSiteDays(ctx, siteIds, day);
   const columns = days.flatMap((d) => (input.by === "room" ? roomColumns(d) : therapistColumns(d)));
   const sites = days.map(daySite);
   const all = columns.flatMap((c) => c.appointments);

@@ -1,12 +1,10 @@
 import { listTodayInput, type TodayArrival, type TodayGap, type TodayView } from "@withy/contracts/diary";
 import { can } from "@withy/core/access/can";
-import { notFound } from "@withy/core/errors";
 import { dayOf, timeOf } from "@withy/core/zoned-time";
 import { stateFacts } from "@withy/diary/appointment-states";
 import { verb } from "../verb";
-import { readDayVisits } from "./day-appointments";
-import { type SiteDay, siteDays, therapistColumns } from "./day-columns";
-import { readFrame } from "./frame";
+import { type SiteDay, therapistColumns } from "./day-columns";
+import { readSiteDays } from "./read-site-days";
 import { readableSites } from "./site-reach";
 import { readArrivals, toCollect } from "./today-arrivals";
 
@@ -52,23 +50,13 @@ function countsOf(lines: readonly TodayArrival[]): TodayView["counts"] {
 /** The desk's day: who comes, who waits, which gaps are left and what is to be collected. */
 export const listToday = verb("diary.read", listTodayInput, async (ctx, input): Promise<TodayView> => {
   const siteIds = await readableSites(ctx, input.siteIds);
-  const now = ctx.clock.now();
-  const day = dayOf(now, ctx.zone);
-  const wide = {
-    from: new Date(now.getTime() - 36 * 3_600_000),
-    to: new Date(now.getTime() + 36 * 3_600_000),
-  };
-  const [frame, visits] = await Promise.all([
-    readFrame(ctx, { firstDay: day, lastDay: day, siteIds, withPulse: true }),
-    readDayVisits(ctx, { siteIds }, wide.from, wide.to),
-  ]);
-  if (frame.sites.length < siteIds.length) throw notFound("site");
-  const days = siteDays(frame, visits, day, now);
-  const ids = new Set(days.flatMap((d) => d.visits.map((v) => v.id)));
+  const day = dayOf(ctx.clock.now(), ctx.zone);
+  const { frame, days } = await readSiteDays(ctx, siteIds, day);
+  const visits = days.flatMap((d) => d.visits.filter((v) => v.site_id === d.site.id));
   const lines = await readArrivals(
     ctx,
     frame,
-    visits.filter((v) => ids.has(v.id)),
+    visits.sort((a, b) => a.from - b.from),
   );
   const gaps = gapsOf(days);
   const seesMoney = siteIds.every((id) => can(ctx.roles, "billing.read", id));
