@@ -1,11 +1,12 @@
 import "@/features/patients/patients.css";
 import { can } from "@withy/core/access/can";
+import { listPatients } from "@withy/services/patients";
 import { ButtonLink } from "@withy/ui/button";
 import { Page, PageBody, PageTitle } from "@withy/ui/page";
 import type { Metadata } from "next";
 import Link from "next/link";
 import { PatientList } from "@/features/patients/components/patient-list";
-import { requireContext } from "@/server/context";
+import { orNotFound, requireContext } from "@/server/context";
 
 export const metadata: Metadata = { title: "Patients" };
 
@@ -15,6 +16,7 @@ export default async function PatientsPage({ searchParams }: PageProps<"/patient
   const mayRegister = can(ctx.roles, "patients.register");
   const search = typeof query["search"] === "string" ? query["search"] : "";
   const page = Math.max(1, Math.floor(Number(query["page"])) || 1);
+  const first = await orNotFound(listPatients(ctx, { search: search.slice(0, 100), page }));
   return (
     <Page>
       <PageTitle
@@ -28,7 +30,7 @@ export default async function PatientsPage({ searchParams }: PageProps<"/patient
         }
       />
       <PageBody className="plist">
-        <PatientList search={search} page={page} mayRegister={mayRegister} />
+        <PatientList search={search} first={first} mayRegister={mayRegister} />
       </PageBody>
     </Page>
   );

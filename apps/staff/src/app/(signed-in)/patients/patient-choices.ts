@@ -3,7 +3,7 @@ import { dayOf } from "@withy/core/zoned-time";
 import type { Context } from "@withy/services/context";
 import { listPayers } from "@withy/services/patients";
 import { listSites, listTherapists } from "@withy/services/practices";
-import type { PatientChoices } from "@/features/patients/components/patient-fields";
+import type { PatientChoices } from "@/features/patients/components/fields-props";
 
 /** The short lists behind the patient form. */
 export async function patientChoices(ctx: Context): Promise<PatientChoices> {

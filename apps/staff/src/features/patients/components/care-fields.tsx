@@ -8,7 +8,7 @@ import { fieldProblem } from "@/api/form-problems";
 import { findGpPractices } from "../api-client";
 import type { SurgeryOption } from "../patient-form";
 import { AddSurgery } from "./add-surgery";
-import type { FieldsProps } from "./patient-fields";
+import type { FieldsProps } from "./fields-props";
 
 export function CareFields({ form, error, choices }: FieldsProps) {
   const { register, control } = form;

@@ -10,7 +10,8 @@ import { useForm } from "react-hook-form";
 import { ApiError } from "@/api/request";
 import { useEditPatient } from "../hooks/use-save-patient";
 import { formFrom, inputFrom } from "../patient-form";
-import { type PatientChoices, PatientFields } from "./patient-fields";
+import type { PatientChoices } from "./fields-props";
+import { PatientFields } from "./patient-fields";
 import { SaveProblem } from "./save-problem";
 import { TheirVersion } from "./their-version";
 

@@ -5,7 +5,7 @@ import { Select } from "@withy/ui/select";
 import { TextInput } from "@withy/ui/text-input";
 import { Controller } from "react-hook-form";
 import { fieldProblem } from "@/api/form-problems";
-import type { FieldsProps } from "./patient-fields";
+import type { FieldsProps } from "./fields-props";
 
 const sexes = [
   { value: "female", label: "Female" },

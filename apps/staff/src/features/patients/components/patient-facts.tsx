@@ -161,7 +161,7 @@ function ConsentLine({ kind, wordingVersion, givenOn }: PatientCareView["consent
     <>
       <dt>{consentWords[kind]}</dt>
       <dd>
-        {wordingVersion}, {plainDateWords(givenOn)}
+        wording {wordingVersion}, {plainDateWords(givenOn)}
       </dd>
     </>
   );

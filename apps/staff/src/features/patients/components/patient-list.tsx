@@ -1,5 +1,5 @@
 "use client";
-import type { PatientRow } from "@withy/contracts/patients";
+import type { PatientPage, PatientRow } from "@withy/contracts/patients";
 import { plainDateWords } from "@withy/core/date-words";
 import { ButtonLink } from "@withy/ui/button";
 import { type DataColumn, DataTable } from "@withy/ui/data-table";
@@ -29,16 +29,17 @@ const columns: readonly DataColumn<PatientRow>[] = [
 
 interface Props {
   search: string;
-  page: number;
+  /** The page of that search, as the server painted it. */
+  first: PatientPage;
   mayRegister: boolean;
 }
 
 /** The whole register, narrowed as one types; the address keeps search and page. */
-export function PatientList({ search: startSearch, page: startPage, mayRegister }: Props) {
+export function PatientList({ search: startSearch, first, mayRegister }: Props) {
   const [typed, setTyped] = useState(startSearch);
-  const [page, setPage] = useState(startPage);
+  const [page, setPage] = useState(first.page);
   const search = useDeferredValue(typed.trim());
-  const { data, error } = usePatientList(search, page);
+  const { data, error } = usePatientList(search, page, { search: startSearch, first });
   useEffect(() => {
     const query = new URLSearchParams();
     if (search !== "") query.set("search", search);

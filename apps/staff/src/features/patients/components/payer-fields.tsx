@@ -3,7 +3,7 @@ import { FieldRow } from "@withy/ui/field-group";
 import { Select } from "@withy/ui/select";
 import { TextInput } from "@withy/ui/text-input";
 import { fieldProblem } from "@/api/form-problems";
-import type { FieldsProps } from "./patient-fields";
+import type { FieldsProps } from "./fields-props";
 
 export function PayerFields({ form, error, choices }: FieldsProps) {
   const { register, watch } = form;
@@ -12,7 +12,7 @@ export function PayerFields({ form, error, choices }: FieldsProps) {
     <>
       <Select
         id="payerId"
-        label="Who pays"
+        label="Payer"
         placeholder="The patient"
         options={choices.payers.map((p) => ({ value: p.id, label: p.name }))}
         error={fieldProblem(error, "payer.payerId")}

@@ -3,7 +3,7 @@ import { Check } from "@withy/ui/check";
 import { FieldGroup, FieldRow } from "@withy/ui/field-group";
 import { TextArea, TextInput } from "@withy/ui/text-input";
 import { fieldProblem } from "@/api/form-problems";
-import type { FieldsProps } from "./patient-fields";
+import type { FieldsProps } from "./fields-props";
 
 const channels = [
   { value: "email", label: "E-mail" },

@@ -7,7 +7,8 @@ import { useRouter } from "next/navigation";
 import { useForm } from "react-hook-form";
 import { useRegisterPatient } from "../hooks/use-save-patient";
 import { emptyForm, inputFrom } from "../patient-form";
-import { type PatientChoices, PatientFields } from "./patient-fields";
+import type { PatientChoices } from "./fields-props";
+import { PatientFields } from "./patient-fields";
 import { SaveProblem } from "./save-problem";
 
 interface Props {

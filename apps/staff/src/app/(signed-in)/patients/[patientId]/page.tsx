@@ -4,13 +4,10 @@ import type { Permission } from "@withy/core/access/permissions";
 import { plainDateWords } from "@withy/core/date-words";
 import { dayOf } from "@withy/core/zoned-time";
 import { getTimeline } from "@withy/services/patients";
-import type { Metadata } from "next";
 import { PatientFacts } from "@/features/patients/components/patient-facts";
 import { Timeline } from "@/features/patients/components/timeline";
 import { orNotFound, requireContext } from "@/server/context";
 import { openPatient } from "./open-patient";
-
-export const metadata: Metadata = { title: "Timeline" };
 
 const kinds: readonly { value: TimelineKind; label: string; permission: Permission }[] = [
   { value: "all", label: "all", permission: "patients.read" },

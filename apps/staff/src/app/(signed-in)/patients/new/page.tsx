@@ -16,7 +16,7 @@ export default async function NewPatientPage({ searchParams }: PageProps<"/patie
     <Page>
       <PageTitle
         title="Register a patient"
-        note="only names, date of birth and one way to reach them are needed"
+        lead="Names, date of birth and one way to reach them are enough to begin."
       />
       <PageBody>
         <RegisterForm

@@ -1,0 +1,4 @@
+import { getMonth } from "@withy/services/reports";
+import { route } from "@/server/run-route";
+
+export const GET = route(getMonth);

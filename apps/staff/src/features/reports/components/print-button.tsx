@@ -1,0 +1,10 @@
+"use client";
+import { Button } from "@withy/ui/button";
+
+export function PrintButton() {
+  return (
+    <Button size="small" onClick={() => window.print()}>
+      Print
+    </Button>
+  );
+}
