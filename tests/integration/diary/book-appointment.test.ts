@@ -71,6 +71,13 @@ describe("booking a visit", () => {
     expect(await messagesAbout(practice, view.id)).toEqual([]);
   });
 
+  it("writes down whoever has just walked in, and sends no invitation to what has begun", async () => {
+    const desk = contextFor(practice, "receptionist");
+    const view = await bookAppointment(desk, followUp(practice, patientId, "2026-12-01T08:45"));
+    expect(view).toMatchObject({ startTime: "08:45", next: ["confirmed", "arrived", "cancelled", "noshow"] });
+    expect(await messagesAbout(practice, view.id)).toEqual([]);
+  });
+
   it("books once for one idempotency key", async () => {
     const desk = withKey(contextFor(practice, "receptionist"), newId());
     const input = followUp(practice, patientId, "2026-12-02T14:00");

@@ -1,7 +1,7 @@
 import { type BookingChoicesView, getBookingChoicesInput } from "@withy/contracts/diary";
 import { dayOf } from "@withy/core/zoned-time";
 import { rooms, services, serviceTherapists, sites, staffMembers, workingPatterns } from "@withy/db/schema";
-import { and, asc, eq } from "drizzle-orm";
+import { and, asc, eq, gte, isNull, or } from "drizzle-orm";
 import { verb } from "../verb";
 import { reachableSites } from "./site-reach";
 
@@ -11,6 +11,7 @@ export const getBookingChoices = verb(
   getBookingChoicesInput,
   async (ctx): Promise<BookingChoicesView> => {
     const { db, practiceId } = ctx;
+    const now = ctx.clock.now();
     const reach = new Set(await reachableSites(ctx, "diary.book"));
     const [siteRows, serviceRows, gives, people, works, roomRows] = await Promise.all([
       db.select().from(sites).where(eq(sites.practiceId, practiceId)).orderBy(asc(sites.position)),
@@ -34,10 +35,14 @@ export const getBookingChoices = verb(
       db
         .selectDistinct({ staffMemberId: workingPatterns.staffMemberId, siteId: workingPatterns.siteId })
         .from(workingPatterns)
-        .where(eq(workingPatterns.practiceId, practiceId)),
+        .where(
+          and(
+            eq(workingPatterns.practiceId, practiceId),
+            or(isNull(workingPatterns.validUntil), gte(workingPatterns.validUntil, dayOf(now, ctx.zone))),
+          ),
+        ),
       db.select().from(rooms).where(eq(rooms.practiceId, practiceId)).orderBy(asc(rooms.position)),
     ]);
-    const now = ctx.clock.now();
     const active = new Set(people.map((p) => p.id));
     return {
       sites: siteRows

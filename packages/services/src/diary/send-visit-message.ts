@@ -1,7 +1,7 @@
 import type { AppointmentMessagePayload, AppointmentTemplate } from "@withy/contracts/diary";
 import type { Context } from "../context";
 import { enqueueMessage } from "../messaging";
-import { isoOf } from "./raw-rows";
+import { isoOf, utc } from "./raw-rows";
 import { readVisitRow, type VisitRow } from "./visit-row";
 
 function addressOf(row: VisitRow): string {
@@ -37,7 +37,10 @@ function payloadOf(
   };
 }
 
-/** Puts an e-mail with its calendar file into the outbox, in the caller's transaction. Without an address: nothing. */
+/**
+ * Puts an e-mail with its calendar file into the outbox, in the caller's transaction. Nothing is sent without an
+ * address, nor about a visit that has begun: whoever walks in needs no invitation.
+ */
 export async function sendVisitMessage(
   ctx: Context,
   template: AppointmentTemplate,
@@ -46,7 +49,7 @@ export async function sendVisitMessage(
 ): Promise<void> {
   const row = await readVisitRow(ctx, appointmentId);
   const { email } = row;
-  if (email === null || email === "") return;
+  if (email === null || email === "" || utc(row.starts_at) <= ctx.clock.now().getTime()) return;
   await enqueueMessage(ctx, {
     template,
     toAddress: email,
