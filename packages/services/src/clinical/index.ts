@@ -1,6 +1,5 @@
 export { addAddendum } from "./add-addendum";
 export { dischargeEpisode, reopenEpisode } from "./discharge-episode";
-export { getClinicalPatient } from "./get-clinical-patient";
 export { getDayList } from "./get-day-list";
 export { getEpisode } from "./get-episode";
 export { getNote } from "./get-note";

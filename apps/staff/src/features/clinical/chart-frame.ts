@@ -27,7 +27,7 @@ export const frame = { left: 34, right: 300, top: 12, bottom: 92, width: 356, he
 const steps = [0.1, 0.2, 0.5, 1, 2, 5, 10, 20, 25, 50, 100];
 
 function niceStep(span: number): number {
-  return steps.find((step) => span / step <= 3.2) ?? 200;
+  return steps.find((step) => span / step <= 4.2) ?? 200;
 }
 
 /** Lowest and highest value in sight: all points and the band, with some air, inside what the scale allows. */

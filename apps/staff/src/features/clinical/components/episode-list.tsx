@@ -1,15 +1,16 @@
 "use client";
 import { episodeStateLabels } from "@withy/clinical/episodes/states";
-import type { ClinicalPatient, EpisodeSummary } from "@withy/contracts/clinical";
+import type { EpisodeSummary } from "@withy/contracts/clinical";
 import { ButtonLink } from "@withy/ui/button";
 import { EmptyState } from "@withy/ui/empty-state";
 import { Line } from "@withy/ui/line";
-import { Page, PageBody, PageTitle } from "@withy/ui/page";
+import { PageBody } from "@withy/ui/page";
 import Link from "next/link";
-import { longDay, shortDay } from "../site-time";
+import { shortDay } from "../site-time";
+import { RecordTitle } from "./record-title";
 
 export interface EpisodeListProps {
-  patient: ClinicalPatient;
+  patientId: string;
   episodes: readonly EpisodeSummary[];
   canWrite: boolean;
 }
@@ -20,20 +21,24 @@ function noteWords({ notes, unsignedNotes }: EpisodeSummary): string {
   return unsignedNotes === 0 ? `${count}, all signed` : `${count}, ${unsignedNotes} to sign`;
 }
 
+function countWords(episodes: readonly EpisodeSummary[]): string {
+  const open = episodes.filter((episode) => episode.state === "open").length;
+  return episodes.length === 0 ? "none yet" : `${open} open, ${episodes.length - open} discharged`;
+}
+
 /** A patient's courses of care, open ones first. */
-export function EpisodeList({ patient, episodes, canWrite }: EpisodeListProps) {
+export function EpisodeList({ patientId, episodes, canWrite }: EpisodeListProps) {
   const openNew = canWrite && (
-    <ButtonLink as={Link} kind="primary" href={`/patients/${patient.id}/episodes/new`}>
+    <ButtonLink as={Link} kind="primary" href={`/patients/${patientId}/episodes/new`}>
       Open an episode
     </ButtonLink>
   );
   return (
-    <Page>
-      <PageTitle
+    <>
+      <RecordTitle
         title="Episodes of care"
-        note={<Link href={`/patients/${patient.id}`}>{patient.name}</Link>}
-        lead={`${patient.name}, ${patient.age}, born ${longDay(patient.bornOn)}`}
-        actions={episodes.length > 0 && openNew}
+        aside={countWords(episodes)}
+        action={episodes.length > 0 && openNew}
       />
       {episodes.map((episode) => (
         <Line
@@ -43,7 +48,7 @@ export function EpisodeList({ patient, episodes, canWrite }: EpisodeListProps) {
         >
           <div className="visit">
             <span className="visit-who">
-              <Link href={`/patients/${patient.id}/episodes/${episode.id}`}>
+              <Link href={`/patients/${patientId}/episodes/${episode.id}`}>
                 {episode.place}: {episode.problem}
               </Link>
               <span className="soft small">
@@ -64,6 +69,6 @@ export function EpisodeList({ patient, episodes, canWrite }: EpisodeListProps) {
           </EmptyState>
         </PageBody>
       )}
-    </Page>
+    </>
   );
 }

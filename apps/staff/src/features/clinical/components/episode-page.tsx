@@ -5,7 +5,7 @@ import { noteStateLabels } from "@withy/clinical/notes/states";
 import type { EpisodeView, MeasureSeriesView } from "@withy/contracts/clinical";
 import { EmptyState } from "@withy/ui/empty-state";
 import { Line } from "@withy/ui/line";
-import { Page, PageBody, PageTitle } from "@withy/ui/page";
+import { PageBody } from "@withy/ui/page";
 import { SectionHead } from "@withy/ui/section-head";
 import Link from "next/link";
 import { useState } from "react";
@@ -16,6 +16,7 @@ import { EndEpisode } from "./end-episode";
 import { EpisodeFacts } from "./episode-facts";
 import { GoalsForm } from "./goals-form";
 import { MeasurePanel } from "./measure-panel";
+import { RecordTitle } from "./record-title";
 import { RedFlagsDialog } from "./red-flags-dialog";
 
 export interface EpisodePageProps {
@@ -63,6 +64,14 @@ function Notes({ episode }: { episode: EpisodeView }) {
   );
 }
 
+function standing(episode: EpisodeView): string {
+  const since =
+    episode.dischargedOn === null
+      ? `open since ${shortDay(episode.openedOn)}`
+      : `discharged ${shortDay(episode.dischargedOn)}`;
+  return `${since}, ${episode.therapistName}, ${episode.siteName}`;
+}
+
 /** One course of care: its notes down the page; goals, flags, measures and its end beside them. */
 export function EpisodePage({ episode: first, measures: firstMeasures, canWrite }: EpisodePageProps) {
   const episode = useEpisode(first).data;
@@ -72,16 +81,15 @@ export function EpisodePage({ episode: first, measures: firstMeasures, canWrite 
   const isOpen = episode.state === "open";
   const flags = readRedFlags(episode.region, episode.redFlags);
   return (
-    <Page className="episode-page">
-      <PageTitle
+    <div className="episode-page">
+      <RecordTitle
         title={
           <>
-            {episode.problem} <span className="side">{episode.place}</span>
+            <span className="side">{episode.place}</span> {episode.problem}
           </>
         }
-        note={<Link href={`/patients/${episode.patient.id}`}>{episode.patient.name}</Link>}
-        lead={`${episode.patient.name}, ${episode.patient.age}. ${isOpen ? `Open since ${shortDay(episode.openedOn)}` : `Discharged ${shortDay(episode.dischargedOn ?? episode.openedOn)}`}, ${episode.therapistName}, ${episode.siteName}`}
-        actions={canWrite && <EndEpisode episode={episode} />}
+        aside={standing(episode)}
+        action={canWrite && <EndEpisode episode={episode} />}
       />
       <div className="episode-columns">
         <Notes episode={episode} />
@@ -120,6 +128,6 @@ export function EpisodePage({ episode: first, measures: firstMeasures, canWrite 
       {isAskingFlags && (
         <RedFlagsDialog episode={episode} onSaved={() => undefined} onClose={() => setIsAskingFlags(false)} />
       )}
-    </Page>
+    </div>
   );
 }

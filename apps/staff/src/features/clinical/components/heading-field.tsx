@@ -20,7 +20,8 @@ export function HeadingField({ heading, value, onChange, error, action, children
   const id = `heading-${heading.key}`;
   useLayoutEffect(() => {
     const area = field.current;
-    if (!area) return;
+    // Browsers that size a field by its content do so in the style sheet, also when the window changes.
+    if (!area || CSS.supports("field-sizing", "content")) return;
     area.style.height = `${line}px`;
     area.style.height = `${Math.max(1, Math.round(area.scrollHeight / line)) * line}px`;
   }, [value]);
@@ -30,7 +31,7 @@ export function HeadingField({ heading, value, onChange, error, action, children
       <div className="heading-line">
         <label htmlFor={id}>
           {heading.label}
-          {heading.isRequired && <span className="needed"> needed</span>}
+          {heading.isRequired && isEmpty && <span className="needed"> needed</span>}
         </label>
         {error && (
           <span className="err" id={`${id}-error`}>

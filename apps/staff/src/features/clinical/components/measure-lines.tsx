@@ -21,9 +21,7 @@ function rowOf(series: MeasureSeriesView, scale: ScaleSeriesView, day: string): 
     today: point.shown,
     before: before?.shown ?? null,
     remark:
-      change && change.direction !== "same"
-        ? `${change.direction} since the first, ${judged}`.replace(/, $/, "")
-        : "",
+      change && change.direction !== "same" ? [change.direction, judged].filter(Boolean).join(", ") : "",
   };
 }
 

@@ -1,9 +1,9 @@
 "use client";
-import type { ClinicalPatient, EpisodeSummary, MeasureSeriesView } from "@withy/contracts/clinical";
+import type { EpisodeSummary, MeasureSeriesView } from "@withy/contracts/clinical";
 import { ButtonLink } from "@withy/ui/button";
 import { ChoiceLinks } from "@withy/ui/choice";
 import { EmptyState } from "@withy/ui/empty-state";
-import { Page, PageBody, PageTitle } from "@withy/ui/page";
+import { PageBody } from "@withy/ui/page";
 import { SectionHead } from "@withy/ui/section-head";
 import Link from "next/link";
 import { useState } from "react";
@@ -12,9 +12,10 @@ import { shortDay } from "../site-time";
 import { MeasureChart } from "./measure-chart";
 import { MeasurePanel } from "./measure-panel";
 import { MeasureWords } from "./measure-words";
+import { RecordTitle } from "./record-title";
 
 export interface MeasuresPageProps {
-  patient: ClinicalPatient;
+  patientId: string;
   episodes: readonly EpisodeSummary[];
   episode: EpisodeSummary | null;
   measures: MeasureSeriesView[];
@@ -22,24 +23,19 @@ export interface MeasuresPageProps {
 }
 
 /** Every measure of an episode over time, each scale with its chart and its words. */
-export function MeasuresPage({ patient, episodes, episode, measures, canWrite }: MeasuresPageProps) {
+export function MeasuresPage({ patientId, episodes, episode, measures, canWrite }: MeasuresPageProps) {
   return (
-    <Page className="measures-page">
-      <PageTitle
+    <>
+      <RecordTitle
         title="Measures"
-        note={<Link href={`/patients/${patient.id}`}>{patient.name}</Link>}
-        lead={
-          episode === null
-            ? patient.name
-            : `${patient.name}, ${patient.age}. ${episode.place}, ${episode.problem}`
-        }
-        actions={
+        aside={episode === null ? undefined : `${episode.place}, ${episode.problem}`}
+        action={
           episodes.length > 1 && (
             <ChoiceLinks
               label="Episode"
               as={Link}
               items={episodes.map((one) => ({
-                href: `/patients/${patient.id}/measures?episode=${one.id}`,
+                href: `/patients/${patientId}/measures?episode=${one.id}`,
                 label: `${one.place}, ${shortDay(one.openedOn)}`,
                 current: one.id === episode?.id,
               }))}
@@ -52,7 +48,7 @@ export function MeasuresPage({ patient, episodes, episode, measures, canWrite }:
           <EmptyState
             title="Nothing measured yet"
             action={
-              <ButtonLink as={Link} href={`/patients/${patient.id}/episodes/new`}>
+              <ButtonLink as={Link} href={`/patients/${patientId}/episodes/new`}>
                 Open an episode
               </ButtonLink>
             }
@@ -63,7 +59,7 @@ export function MeasuresPage({ patient, episodes, episode, measures, canWrite }:
       ) : (
         <EpisodeMeasures episodeId={episode.id} first={measures} canWrite={canWrite} />
       )}
-    </Page>
+    </>
   );
 }
 

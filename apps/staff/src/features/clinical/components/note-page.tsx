@@ -8,6 +8,7 @@ import { useNote } from "../hooks/use-note";
 import { clockAt, isoDayAt } from "../site-time";
 import { DayStrip } from "./day-strip";
 import { PatientHead } from "./note-head";
+import type { NoteParts } from "./note-parts";
 import { ReadNote } from "./read-note";
 import { WriteNote } from "./write-note";
 
@@ -15,14 +16,6 @@ export interface NotePageProps {
   note: NoteView;
   measures: MeasureSeriesView[];
   day: DayList;
-}
-
-export interface NoteParts {
-  note: NoteView;
-  measures: readonly MeasureSeriesView[];
-  day: DayList;
-  visitDay: string;
-  visitWords: string;
 }
 
 /** The note of one visit: written while it is a draft of one's own, else read. */

@@ -2,12 +2,11 @@
 import { problemsOf } from "@withy/clinical/episodes/problems";
 import { checkSide, regions, type Side, sideLabels, sides } from "@withy/clinical/episodes/sides";
 import { type ReferralSource, referralSourceLabels, referralSources } from "@withy/clinical/episodes/states";
-import type { ClinicalPatient } from "@withy/contracts/clinical";
 import { Button, ButtonLink, Buttons } from "@withy/ui/button";
 import { Choice } from "@withy/ui/choice";
 import { ErrorSummary, type FieldError } from "@withy/ui/error-summary";
 import { FieldGroup } from "@withy/ui/field-group";
-import { Page, PageBody, PageTitle } from "@withy/ui/page";
+import { PageBody } from "@withy/ui/page";
 import { Select } from "@withy/ui/select";
 import { TextArea, TextInput } from "@withy/ui/text-input";
 import Link from "next/link";
@@ -16,9 +15,10 @@ import { useState } from "react";
 import { problemItems } from "@/api/form-problems";
 import { useOpenEpisode } from "../hooks/use-open-episode";
 import { useStartNote } from "../hooks/use-start-note";
+import { RecordTitle } from "./record-title";
 
 export interface OpenEpisodeFormProps {
-  patient: ClinicalPatient;
+  patientId: string;
   sites: readonly { id: string; name: string }[];
   deskSiteId: string;
   /** The visit that it is opened for: its note is begun at once. */
@@ -56,7 +56,7 @@ function problemsIn(typed: Typed): FieldError[] {
 }
 
 /** Opens a course of care: where, which side, what for. */
-export function OpenEpisodeForm({ patient, sites, deskSiteId, visitId }: OpenEpisodeFormProps) {
+export function OpenEpisodeForm({ patientId, sites, deskSiteId, visitId }: OpenEpisodeFormProps) {
   const router = useRouter();
   const open = useOpenEpisode();
   const start = useStartNote();
@@ -85,7 +85,7 @@ export function OpenEpisodeForm({ patient, sites, deskSiteId, visitId }: OpenEpi
       {
         ...rest,
         side,
-        patientId: patient.id,
+        patientId,
         appointmentId: visitId,
         goals: goals
           .split("\n")
@@ -96,18 +96,14 @@ export function OpenEpisodeForm({ patient, sites, deskSiteId, visitId }: OpenEpi
       {
         onSuccess: (episode) =>
           visitId === null
-            ? router.push(`/patients/${patient.id}/episodes/${episode.id}`)
+            ? router.push(`/patients/${patientId}/episodes/${episode.id}`)
             : start.mutate({ appointmentId: visitId, episodeId: episode.id }),
       },
     );
   };
   return (
-    <Page>
-      <PageTitle
-        title="Open an episode"
-        lead={`${patient.name}, ${patient.age}`}
-        note="One problem, from first visit to discharge"
-      />
+    <>
+      <RecordTitle title="Open an episode" aside="one problem, from first visit to discharge" />
       <PageBody>
         <form
           className="episode-form"
@@ -204,12 +200,12 @@ export function OpenEpisodeForm({ patient, sites, deskSiteId, visitId }: OpenEpi
             <Button kind="primary" type="submit" busy={open.isPending || start.isPending}>
               {visitId === null ? "Open the episode" : "Open it and write the note"}
             </Button>
-            <ButtonLink as={Link} href={`/patients/${patient.id}/episodes`}>
+            <ButtonLink as={Link} href={`/patients/${patientId}/episodes`}>
               Leave it
             </ButtonLink>
           </Buttons>
         </form>
       </PageBody>
-    </Page>
+    </>
   );
 }

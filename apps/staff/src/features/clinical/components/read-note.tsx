@@ -5,7 +5,7 @@ import { AddendumDialog } from "./addendum-dialog";
 import { LastNote } from "./last-note";
 import { MeasurePanel } from "./measure-panel";
 import { NoteBar } from "./note-bar";
-import type { NoteParts } from "./note-page";
+import type { NoteParts } from "./note-parts";
 import { SignedNote } from "./signed-note";
 
 /** A note that is read: signed, or someone else's draft. */

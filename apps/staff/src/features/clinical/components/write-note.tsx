@@ -10,7 +10,7 @@ import { LastNote } from "./last-note";
 import { MeasurePanel } from "./measure-panel";
 import { NoteBar } from "./note-bar";
 import { NoteEditor } from "./note-editor";
-import type { NoteParts } from "./note-page";
+import type { NoteParts } from "./note-parts";
 import { RedFlagsDialog } from "./red-flags-dialog";
 import { SavedMark } from "./saved-mark";
 import { SignDialog } from "./sign-dialog";

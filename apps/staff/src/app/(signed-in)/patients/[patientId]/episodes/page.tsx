@@ -1,5 +1,5 @@
 import { can } from "@withy/core/access/can";
-import { getClinicalPatient, listEpisodes } from "@withy/services/clinical";
+import { listEpisodes } from "@withy/services/clinical";
 import type { Metadata } from "next";
 import { EpisodeList } from "@/features/clinical/components/episode-list";
 import { orNotFound, requireContext } from "@/server/context";
@@ -10,9 +10,8 @@ export const metadata: Metadata = { title: "Episodes of care" };
 export default async function EpisodesPage({ params }: PageProps<"/patients/[patientId]/episodes">) {
   const context = await requireContext("clinical.read");
   const { patientId } = await params;
-  const patient = await orNotFound(getClinicalPatient(context, { patientId }));
-  const episodes = await listEpisodes(context, { patientId });
+  const episodes = await orNotFound(listEpisodes(context, { patientId }));
   return (
-    <EpisodeList patient={patient} episodes={episodes} canWrite={can(context.roles, "clinical.write")} />
+    <EpisodeList patientId={patientId} episodes={episodes} canWrite={can(context.roles, "clinical.write")} />
   );
 }

@@ -1,5 +1,5 @@
 import { can } from "@withy/core/access/can";
-import { getClinicalPatient, listEpisodes, listMeasures } from "@withy/services/clinical";
+import { listEpisodes, listMeasures } from "@withy/services/clinical";
 import type { Metadata } from "next";
 import { MeasuresPage } from "@/features/clinical/components/measures-page";
 import { orNotFound, requireContext } from "@/server/context";
@@ -13,15 +13,14 @@ export default async function MeasuresRoute({
 }: PageProps<"/patients/[patientId]/measures">) {
   const context = await requireContext("clinical.read");
   const [{ patientId }, { episode: asked }] = await Promise.all([params, searchParams]);
-  const patient = await orNotFound(getClinicalPatient(context, { patientId }));
-  const episodes = await listEpisodes(context, { patientId });
+  const episodes = await orNotFound(listEpisodes(context, { patientId }));
   const episode = episodes.find(({ id }) => id === asked) ?? episodes[0] ?? null;
   const measures = episode === null ? [] : await listMeasures(context, { episodeId: episode.id });
   const canWrite = can(context.roles, "clinical.write") && episode?.state === "open";
   return (
     <MeasuresPage
       key={episode?.id}
-      patient={patient}
+      patientId={patientId}
       episodes={episodes}
       episode={episode}
       measures={measures}
