@@ -103,7 +103,7 @@ describe("a discharge letter", () => {
     const letter = await draftDischargeLetter(ctx, { episodeId: treated.episode.id });
     const texts = sentencesOf(letter).map((sentence) => sentence.text);
     expect(texts.find((text) => text.startsWith("Pain rating"))).toMatch(
-      /7 on 17 November 2026, 3 on 1 December 2026, out of 10\. Better by 4, beyond measurement error \(1\.77\)\./,
+      /7 out of 10 on 17 November 2026, 3 on 1 December 2026\. Better by 4, beyond measurement error \(1\.77\)\./,
     );
     expect(texts).toContain("Goal: Walk to the harbour (met by 1 December 2026).");
     expect(texts).toContain("Warning signs present: Weight lost without trying.");

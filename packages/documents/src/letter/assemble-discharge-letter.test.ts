@@ -34,7 +34,7 @@ describe("a discharge letter assembled from the record", () => {
       "One other sign was not asked about.",
     ]);
     expect(textsOf(hipFacts, "scales")).toEqual([
-      "Pain on walking: 6 on 6 October 2026, 3 on 1 December 2026, out of 10. Better by 3, beyond measurement error (2.0).",
+      "Pain on walking: 6 out of 10 on 6 October 2026, 3 on 1 December 2026. Better by 3, beyond measurement error (2.0).",
       "30-second chair stand: 13 stands on 1 December 2026. Not below average for women 60 to 64: 12 or more expected.",
     ]);
     expect(textsOf(hipFacts, "summary")).toEqual([

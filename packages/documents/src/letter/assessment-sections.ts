@@ -65,7 +65,7 @@ function measureWords({ name, scale, first, last, timesTaken, change, standing }
   const scores =
     timesTaken === 1
       ? `${name}: ${last.score}${unit} on ${plainDateWords(last.on)}.`
-      : `${name}: ${first.score} on ${plainDateWords(first.on)}, ${last.score} on ${plainDateWords(last.on)}${unit === "" ? "" : `,${unit}`}.`;
+      : `${name}: ${first.score}${unit} on ${plainDateWords(first.on)}, ${last.score} on ${plainDateWords(last.on)}.`;
   return [scores, change, standing].filter((part) => part !== null && part !== "").join(" ");
 }
 

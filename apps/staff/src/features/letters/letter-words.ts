@@ -34,6 +34,11 @@ export function shortMoment(iso: string, zone: string): string {
   return `${shortDate(dayOf(at, zone), dayOf(new Date(), zone))}, ${timeOf(at, zone)}`;
 }
 
+/** "1 Dec". */
+export function shortDay(iso: string, zone: string): string {
+  return shortDate(dayOf(new Date(iso), zone), dayOf(new Date(), zone));
+}
+
 export const clockNow = (zone: string): string => timeOf(new Date(), zone);
 
 /** What became of one sending, in a line. */

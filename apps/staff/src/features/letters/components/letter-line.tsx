@@ -2,7 +2,7 @@ import type { LetterRow } from "@withy/contracts/letters";
 import { Glyph } from "@withy/ui/glyph";
 import { Line } from "@withy/ui/line";
 import Link from "next/link";
-import { shortMoment } from "../letter-words";
+import { shortDay } from "../letter-words";
 
 /** One letter of a list: when, what, about whom, to whom, and where it stands. */
 export function LetterLine({
@@ -15,7 +15,7 @@ export function LetterLine({
   hidePatient?: boolean;
 }) {
   return (
-    <Line gutter={shortMoment(letter.signedAt ?? letter.updatedAt, zone)} className="letter-row">
+    <Line gutter={shortDay(letter.signedAt ?? letter.updatedAt, zone)} note className="letter-row">
       <span className="grow">
         <Link href={`/letters/${letter.id}`}>{letter.title}</Link>
         {!hidePatient && <>, {letter.patientName}</>}

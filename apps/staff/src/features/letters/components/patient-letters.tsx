@@ -4,7 +4,6 @@ import type { Page as PageOf } from "@withy/contracts/page";
 import { Button } from "@withy/ui/button";
 import { EmptyState } from "@withy/ui/empty-state";
 import { Line } from "@withy/ui/line";
-import { PageBody } from "@withy/ui/page";
 import { SectionHead } from "@withy/ui/section-head";
 import { useRouter } from "next/navigation";
 import { ApiError } from "@/api/request";
@@ -46,20 +45,20 @@ export function PatientLetters({
     <>
       {mayWrite && ordered.length > 0 && (
         <section aria-labelledby="write-letter">
-          <PageBody>
+          <div className="letter-list-head">
             <SectionHead
               id="write-letter"
               title="Write a discharge letter"
               aside="from the record as it stands"
             />
-          </PageBody>
+          </div>
           {ordered.map((episode, index) => (
             <EpisodeLine key={episode.id} episode={episode} isFirst={index === 0} />
           ))}
         </section>
       )}
       <section aria-labelledby="letters-so-far">
-        <PageBody>
+        <div className="letter-list-head">
           <SectionHead id="letters-so-far" title="Letters so far" />
           {rows.length === 0 && (
             <EmptyState title="No letters yet">
@@ -68,7 +67,7 @@ export function PatientLetters({
                 : "What is written and sent about this patient will stand here."}
             </EmptyState>
           )}
-        </PageBody>
+        </div>
         {rows.map((letter) => (
           <LetterLine key={letter.id} letter={letter} zone={zone} hidePatient />
         ))}

@@ -24,7 +24,12 @@ export function WriteSection({ section, handle, letter, stale }: WriteSectionPro
   };
   return (
     <section aria-labelledby={`part-${section.key}`}>
-      <h2 id={`part-${section.key}`}>{section.heading}</h2>
+      <div className="letter-part">
+        <h2 id={`part-${section.key}`}>{section.heading}</h2>
+        <Button kind="plain" size="small" onClick={add}>
+          Add a sentence<span className="vh"> to {section.heading}</span>
+        </Button>
+      </div>
       {section.sentences.map((sentence, index) => (
         <WriteSentence
           // By place: a new line gets its lasting id from the server, and must keep the caret then.
@@ -37,9 +42,6 @@ export function WriteSection({ section, handle, letter, stale }: WriteSectionPro
           isStale={stale.has(sentence.id)}
         />
       ))}
-      <Button kind="plain" size="small" className="letter-add" onClick={add}>
-        Add a sentence<span className="vh"> to {section.heading}</span>
-      </Button>
     </section>
   );
 }
