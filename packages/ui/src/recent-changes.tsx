@@ -1,5 +1,4 @@
 "use client";
-import { Toast } from "@base-ui/react/toast";
 import {
   createContext,
   type ReactNode,
@@ -10,6 +9,7 @@ import {
   useRef,
   useState,
 } from "react";
+import { type ToastMessage, Toasts } from "./toast";
 
 export interface Change {
   id: string;
@@ -37,22 +37,21 @@ interface Changes {
 const Context = createContext<Changes | null>(null);
 const kept = 50;
 
-/** Holds the list of what was done in this window, and shows each new one for a few seconds. */
-export function ChangesProvider({ children }: { children: ReactNode }) {
-  return (
-    <Toast.Provider timeout={8000}>
-      <ChangeList>{children}</ChangeList>
-      <Toast.Portal>
-        <Toast.Viewport className="toasts">
-          <Toasts />
-        </Toast.Viewport>
-      </Toast.Portal>
-    </Toast.Provider>
-  );
+/** The messages on show, and how one comes and goes. */
+function useToasts() {
+  const [messages, setMessages] = useState<readonly ToastMessage[]>([]);
+  const count = useRef(0);
+  const show = useCallback((message: Omit<ToastMessage, "id">) => {
+    count.current += 1;
+    setMessages((list) => [...list, { ...message, id: `toast-${count.current}` }].slice(-3));
+  }, []);
+  const drop = useCallback((id: string) => setMessages((list) => list.filter((one) => one.id !== id)), []);
+  return { messages, show, drop };
 }
 
-function ChangeList({ children }: { children: ReactNode }) {
-  const { add } = Toast.useToastManager();
+/** Holds the list of what was done in this window, and shows each new one for a few seconds. */
+export function ChangesProvider({ children }: { children: ReactNode }) {
+  const { messages, show, drop } = useToasts();
   const [changes, setChanges] = useState<readonly Change[]>([]);
   const current = useRef(changes);
   useEffect(() => {
@@ -71,41 +70,33 @@ function ChangeList({ children }: { children: ReactNode }) {
       try {
         await change.undo();
         mark(id, "undone");
-        add({ title: `Taken back: ${change.said}` });
+        show({ said: `Taken back: ${change.said}` });
       } catch (error) {
         mark(id, "kept");
-        add({
-          title: error instanceof Error ? error.message : "It could not be taken back. Look at it again.",
-          priority: "high",
+        show({
+          said: error instanceof Error ? error.message : "It could not be taken back. Look at it again.",
         });
       }
     },
-    [add, mark],
+    [mark, show],
   );
   const announce = useCallback(
     (announcement: Announcement) => {
       next.current += 1;
       const id = `change-${next.current}`;
       setChanges((list) => [{ ...announcement, id, state: "done" as const }, ...list].slice(0, kept));
-      const action = announcement.undo
-        ? { actionProps: { children: "Undo", onClick: () => void undo(id) } }
-        : {};
-      add({ title: announcement.said, ...action });
+      const action = announcement.undo ? { label: "Undo", run: () => void undo(id) } : undefined;
+      show({ said: announcement.said, action });
     },
-    [add, undo],
+    [show, undo],
   );
   const value = useMemo(() => ({ changes, announce, undo }), [changes, announce, undo]);
-  return <Context value={value}>{children}</Context>;
-}
-
-function Toasts() {
-  const { toasts } = Toast.useToastManager();
-  return toasts.map((toast) => (
-    <Toast.Root key={toast.id} toast={toast} className="toast lifted">
-      <Toast.Title render={<span />} />
-      <Toast.Action className="btn" data-kind="plain" data-size="small" />
-    </Toast.Root>
-  ));
+  return (
+    <Context value={value}>
+      {children}
+      <Toasts messages={messages} onGone={drop} />
+    </Context>
+  );
 }
 
 /** What was done here, newest first, and the way to say that something was done. */
