@@ -1,10 +1,18 @@
 import { newId } from "@withy/core/ids";
-import { absences } from "@withy/db/schema";
-import { cancelAppointment, getBookingChoices, getDiaryDay, getTherapistWeek } from "@withy/services/diary";
+import { absences, sites } from "@withy/db/schema";
+import {
+  bookAppointment,
+  cancelAppointment,
+  getBookingChoices,
+  getDiaryDay,
+  getTherapistWeek,
+} from "@withy/services/diary";
+import { and, eq } from "drizzle-orm";
 import { beforeAll, describe, expect, it } from "vitest";
 import { contextFor } from "../../support/contexts";
+import { addPatient } from "../../support/people";
 import { buildPractice, type TestPractice } from "../../support/practice";
-import { bookedVisit, failureOf } from "./booking-steps";
+import { bookedVisit, failureOf, followUp } from "./booking-steps";
 
 let practice: TestPractice;
 let other: TestPractice;
@@ -117,6 +125,26 @@ describe("the day", () => {
       "not-found",
     );
     expect((await failureOf(getDiaryDay(contextFor(practice, "accounts"), {}))).code).toBe("forbidden");
+  });
+
+  it("is the site's own day where the site lies in another zone", async () => {
+    const own = await buildPractice();
+    const { tollhouse } = own.sites;
+    await own.db
+      .update(sites)
+      .set({ zone: "Pacific/Auckland" })
+      .where(and(eq(sites.practiceId, own.practiceId), eq(sites.id, tollhouse.id)));
+    const owner = contextFor(own, "owner");
+    const patient = await addPatient(own);
+    const place = { siteId: tollhouse.id, therapistId: own.staff.otherTherapist.id };
+    const visit = await bookAppointment(owner, followUp(own, patient.id, "2026-12-03T09:00", place));
+    expect(visit).toMatchObject({
+      startsAt: "2026-12-02T20:00:00.000Z",
+      day: "2026-12-03",
+      startTime: "09:00",
+    });
+    const day = await getDiaryDay(owner, { day: "2026-12-03", siteIds: tollhouse.id });
+    expect(day.columns.flatMap((c) => c.appointments)).toMatchObject([{ id: visit.id, fromMinute: 540 }]);
   });
 });
 
