@@ -70,7 +70,7 @@ function plain(amount: number): string {
 
 function words(scale: Scale, direction: "better" | "worse", size: number, amount: number | null): string {
   const by = `${direction === "better" ? "Better" : "Worse"} by ${sizeWords(size, amount, scale.decimals)}`;
-  if (amount === null) return `${by}. No measurement error is published for this scale.`;
+  if (amount === null) return `${by}.`;
   return reaches(size, amount)
     ? `${by}, beyond measurement error (${plain(amount)}).`
     : `${by}, within measurement error (${plain(amount)}).`;

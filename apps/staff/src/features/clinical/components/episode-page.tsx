@@ -11,7 +11,7 @@ import Link from "next/link";
 import { useState } from "react";
 import { useEpisode } from "../hooks/use-episode";
 import { useMeasures } from "../hooks/use-measures";
-import { dayAt, shortDay } from "../site-time";
+import { isoDayAt, shortDay } from "../site-time";
 import { EndEpisode } from "./end-episode";
 import { EpisodeFacts } from "./episode-facts";
 import { GoalsForm } from "./goals-form";
@@ -38,7 +38,7 @@ function Notes({ episode }: { episode: EpisodeView }) {
       {[...episode.noteLines].reverse().map((note) => (
         <Line
           key={note.id}
-          gutter={<time dateTime={note.visitAt}>{dayAt(note.visitAt, episode.zone)}</time>}
+          gutter={<time dateTime={note.visitAt}>{shortDay(isoDayAt(note.visitAt, episode.zone))}</time>}
           tick
         >
           <div className="visit">

@@ -1,20 +1,24 @@
 "use client";
-import type { ActivityMeasure, PerformanceTest, Questionnaire } from "@withy/clinical/measures/measure";
-import { Button } from "@withy/ui/button";
+import type { PerformanceTest, Questionnaire } from "@withy/clinical/measures/measure";
 import { Check } from "@withy/ui/check";
 import { Choice } from "@withy/ui/choice";
 import { FieldGroup } from "@withy/ui/field-group";
 import { TextInput } from "@withy/ui/text-input";
-import type { TypedActivity, TypedMeasure } from "../typed-measure";
+import type { TypedMeasure } from "../typed-measure";
 
-interface Shared {
+export interface MeasureFieldProps {
   typed: TypedMeasure;
   onChange: (typed: TypedMeasure) => void;
   problem: (id: string) => string | undefined;
 }
 
 /** One question in our own words, answered by one press. */
-export function OwnQuestion({ measure, typed, onChange, problem }: Shared & { measure: Questionnaire }) {
+export function OwnQuestion({
+  measure,
+  typed,
+  onChange,
+  problem,
+}: MeasureFieldProps & { measure: Questionnaire }) {
   const { min, max } = measure.answer;
   const options = Array.from({ length: max - min + 1 }, (_, i) => ({
     value: String(min + i),
@@ -35,7 +39,12 @@ export function OwnQuestion({ measure, typed, onChange, problem }: Shared & { me
 }
 
 /** Numbered items by subscale: the published sentences are on the practice's own form. */
-export function NumberedItems({ measure, typed, onChange, problem }: Shared & { measure: Questionnaire }) {
+export function NumberedItems({
+  measure,
+  typed,
+  onChange,
+  problem,
+}: MeasureFieldProps & { measure: Questionnaire }) {
   const { min, max } = measure.answer;
   const set = (at: number, value: string) =>
     onChange({ ...typed, items: typed.items.map((old, i) => (i === at ? value : old)) });
@@ -69,51 +78,13 @@ export function NumberedItems({ measure, typed, onChange, problem }: Shared & { 
   ));
 }
 
-/** Three to five things in the patient's own words, the same ones each time. */
-export function Activities({ measure, typed, onChange, problem }: Shared & { measure: ActivityMeasure }) {
-  const set = (at: number, change: Partial<TypedActivity>) =>
-    onChange({
-      ...typed,
-      activities: typed.activities.map((old, i) => (i === at ? { ...old, ...change } : old)),
-    });
-  return (
-    <>
-      {typed.activities.map((activity, i) => (
-        <div className="activity" key={i}>
-          <TextInput
-            id={`activities.${i}.name`}
-            label={`Activity ${i + 1}`}
-            maxLength={120}
-            value={activity.name}
-            onChange={(event) => set(i, { name: event.target.value })}
-            error={problem(`activities.${i}.name`)}
-          />
-          <TextInput
-            id={`activities.${i}.score`}
-            label={`${measure.answer.min} to ${measure.answer.max}`}
-            aria-label={`Activity ${i + 1}, ${measure.answer.min} to ${measure.answer.max}`}
-            span="short"
-            inputMode="numeric"
-            value={activity.score}
-            onChange={(event) => set(i, { score: event.target.value })}
-            error={problem(`activities.${i}.score`)}
-          />
-        </div>
-      ))}
-      {typed.activities.length < measure.most && (
-        <Button
-          size="small"
-          onClick={() => onChange({ ...typed, activities: [...typed.activities, { name: "", score: "" }] })}
-        >
-          Another activity
-        </Button>
-      )}
-    </>
-  );
-}
-
 /** One reading of a performance test, with the conditions that decide what it counts for. */
-export function Reading({ measure, typed, onChange, problem }: Shared & { measure: PerformanceTest }) {
+export function Reading({
+  measure,
+  typed,
+  onChange,
+  problem,
+}: MeasureFieldProps & { measure: PerformanceTest }) {
   return (
     <>
       <TextInput

@@ -12,7 +12,8 @@ import { useState } from "react";
 import { problemItems } from "@/api/form-problems";
 import { useRecordMeasure } from "../hooks/use-record-measure";
 import { emptyFields, entryFrom, isBlank, type TypedMeasure } from "../typed-measure";
-import { Activities, NumberedItems, OwnQuestion, Reading } from "./measure-fields";
+import { Activities } from "./activity-fields";
+import { NumberedItems, OwnQuestion, Reading } from "./measure-fields";
 
 export interface MeasureFormProps {
   measure: Measure;

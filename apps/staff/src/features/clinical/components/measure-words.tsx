@@ -17,6 +17,7 @@ export function MeasureWords({ scale, credit }: { scale: ScaleSeriesView; credit
         <p>
           {sinceFirst(scale)}: <b>{scale.change.words}</b>
           {scale.importance !== null && ` ${scale.importance}`}
+          {scale.errorAmount === null && " No measurement error is published for this scale."}
         </p>
       )}
       {scale.lastStep?.kind === "compared" && <p>Since last time: {scale.lastStep.words}</p>}
@@ -24,10 +25,7 @@ export function MeasureWords({ scale, credit }: { scale: ScaleSeriesView; credit
       <details>
         <summary>source</summary>
         <p className="small soft">
-          {credit}.{" "}
-          {scale.errorSource === null
-            ? "No measurement error is published for this scale."
-            : `Error: ${scale.errorSource}.`}
+          {credit}.{scale.errorSource !== null && ` Error: ${scale.errorSource}.`}
         </p>
       </details>
     </div>

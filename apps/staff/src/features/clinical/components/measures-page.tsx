@@ -6,12 +6,11 @@ import { EmptyState } from "@withy/ui/empty-state";
 import { PageBody } from "@withy/ui/page";
 import { SectionHead } from "@withy/ui/section-head";
 import Link from "next/link";
-import { useState } from "react";
 import { useMeasures } from "../hooks/use-measures";
 import { shortDay } from "../site-time";
 import { MeasureChart } from "./measure-chart";
-import { MeasurePanel } from "./measure-panel";
 import { MeasureWords } from "./measure-words";
+import { RecordMeasure } from "./record-measure";
 import { RecordTitle } from "./record-title";
 
 export interface MeasuresPageProps {
@@ -73,7 +72,6 @@ function EpisodeMeasures({
   canWrite: boolean;
 }) {
   const measures = useMeasures(episodeId, first).data;
-  const [isRecording, setIsRecording] = useState(false);
   return (
     <div className="episode-columns">
       <PageBody className="courses">
@@ -97,16 +95,11 @@ function EpisodeMeasures({
           )),
         )}
       </PageBody>
-      <aside className="episode-side" aria-label="Record">
-        <MeasurePanel
-          episodeId={episodeId}
-          noteId={null}
-          measures={measures}
-          canRecord={canWrite}
-          isRecording={isRecording}
-          onRecording={setIsRecording}
-        />
-      </aside>
+      {canWrite && (
+        <aside className="episode-side" aria-label="Record">
+          <RecordMeasure episodeId={episodeId} measures={measures} />
+        </aside>
+      )}
     </div>
   );
 }

@@ -4,7 +4,7 @@ import type { UnsignedItem } from "@withy/contracts/clinical";
 import { Button, ButtonLink } from "@withy/ui/button";
 import { Line } from "@withy/ui/line";
 import Link from "next/link";
-import { clockAt, dayAt } from "../site-time";
+import { clockAt, isoDayAt, shortDay } from "../site-time";
 
 export interface UnsignedLineProps {
   item: UnsignedItem;
@@ -23,7 +23,7 @@ function lackWords(item: UnsignedItem): string {
 export function UnsignedLine({ item, zone, onStart }: UnsignedLineProps) {
   const { noteId, appointmentId, patientId } = item;
   return (
-    <Line gutter={<time dateTime={item.visitAt}>{dayAt(item.visitAt, zone)}</time>} tick>
+    <Line gutter={<time dateTime={item.visitAt}>{shortDay(isoDayAt(item.visitAt, zone))}</time>} tick>
       <div className="visit">
         <span className="visit-who">
           <Link href={`/patients/${patientId}`}>{item.patientName}</Link>

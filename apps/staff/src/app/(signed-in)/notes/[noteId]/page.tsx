@@ -5,6 +5,10 @@ import { NotePage } from "@/features/clinical/components/note-page";
 import { orNotFound, requireContext } from "@/server/context";
 import "@/features/clinical/clinical.css";
 import "@/features/clinical/note-page.css";
+import "@/features/clinical/patient-head.css";
+import "@/features/clinical/day-strip.css";
+import "@/features/clinical/note-lines.css";
+import "@/features/clinical/note-bar.css";
 
 export const metadata: Metadata = { title: "Note" };
 
