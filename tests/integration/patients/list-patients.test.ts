@@ -114,7 +114,7 @@ test("pages hold the whole list in name order, each person once", async () => {
   const ctx = contextFor(crowd, "receptionist");
   const seen: string[] = [];
   for (const page of [1, 2, 3]) {
-    const found = await listPatients(ctx, { search: "pask", page, pageSize: 3 });
+    const found = await listPatients(ctx, { search: "pask", page, pageSize: 3, withTotal: true });
     expect(found.total).toBe(8);
     seen.push(...found.rows.map((row) => row.name));
   }
@@ -122,4 +122,10 @@ test("pages hold the whole list in name order, each person once", async () => {
   const all = await listPatients(ctx, { search: "", pageSize: 100 });
   expect(all.rows[0]?.name).toBe("Paskal Aune");
   expect(all.total).toBe(8);
+});
+
+test("a field that finds as one types gets the best few, and hears that there are more", async () => {
+  const few = await listPatients(contextFor(practice, "receptionist"), { search: "tam", pageSize: 2 });
+  expect(few).toMatchObject({ total: 2, isCutShort: true });
+  expect(few.rows.map((row) => row.id)).toEqual([ann.id, tamworth.id]);
 });

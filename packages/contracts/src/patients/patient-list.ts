@@ -5,6 +5,8 @@ import type { Page } from "../page";
 /** One box for everything: names in any order, date of birth, phone, NHS number, invoice number. */
 export const listPatientsInput = z.strictObject({
   search: z.string().trim().max(100, "Use 100 characters or fewer.").default(""),
+  /** Whether all matches are counted, for a list with pages; a field that finds as one types needs the best few. */
+  withTotal: z.union([z.boolean(), z.stringbool()]).default(false),
   ...pageFields,
 });
 export type ListPatientsInput = z.input<typeof listPatientsInput>;
@@ -22,7 +24,7 @@ export interface PatientRow {
 }
 
 export interface PatientPage extends Page<PatientRow> {
-  /** More match than are counted; the search must be narrowed to reach them. */
+  /** More match than `total` says, which is as far as they were counted. */
   readonly isCutShort: boolean;
 }
 

@@ -16,25 +16,23 @@ const countedAtMost = 1000;
 export const listPatients = verb(
   "patients.read",
   listPatientsInput,
-  async (ctx, { search, page, pageSize }): Promise<PatientPage> => {
-    const everyone = { where: sql`true`, sortBy: patients.nameLastFirst };
-    const meaning = readSearch(search, dayOf(ctx.clock.now(), ctx.zone));
-    const branches = search === "" ? [everyone] : searchBranches(ctx, meaning);
+  async (ctx, { search, page, pageSize, withTotal }): Promise<PatientPage> => {
+    const branches = search === "" ? [everyone] : searchBranches(ctx, readSearch(search, todayOf(ctx)));
     const first = (page - 1) * pageSize;
-    if (branches.length === 0 || first >= countedAtMost)
-      return { rows: [], page, pageSize, total: 0, isCutShort: false };
-    const found = await findRows(ctx, branches, first, pageSize);
-    const isWhole = found.length < pageSize && (found.length > 0 || first === 0);
-    const counted = isWhole ? first + found.length : await countRows(ctx, branches);
-    return {
-      rows: found.map(toPatientRow),
-      page,
-      pageSize,
-      total: Math.min(counted, countedAtMost),
-      isCutShort: counted > countedAtMost,
-    };
+    const found = first >= countedAtMost ? [] : await findRows(ctx, branches, first, pageSize + 1);
+    const rows = found.slice(0, pageSize).map(toPatientRow);
+    const known = first + rows.length;
+    if (found.length <= pageSize) return { rows, page, pageSize, total: known, isCutShort: false };
+    if (!withTotal) return { rows, page, pageSize, total: known, isCutShort: true };
+    const counted = await countRows(ctx, branches);
+    const total = Math.min(counted, countedAtMost);
+    return { rows, page, pageSize, total, isCutShort: counted > countedAtMost };
   },
 );
+
+const everyone: SearchBranch = { where: sql`true`, sortBy: patients.nameLastFirst };
+
+const todayOf = (ctx: Context) => dayOf(ctx.clock.now(), ctx.zone);
 
 async function findRows(ctx: Context, branches: SearchBranch[], first: number, size: number) {
   const query = ({ where, sortBy }: SearchBranch, rank: number, limit: number, offset: number) =>

@@ -15,7 +15,7 @@ import { get, write } from "@/api/request";
 import { surgeryOption } from "./patient-form";
 
 export const listPatients = (search: string, page: number, signal?: AbortSignal) =>
-  get<PatientPage>("/api/patients", { search, page }, signal);
+  get<PatientPage>("/api/patients", { search, page, withTotal: true }, signal);
 
 export const registerPatient = (input: RegisterPatientInput, idempotencyKey: string) =>
   write<PatientRow>("POST", "/api/patients", input, idempotencyKey);

@@ -16,7 +16,7 @@ export default async function PatientsPage({ searchParams }: PageProps<"/patient
   const mayRegister = can(ctx.roles, "patients.register");
   const search = typeof query["search"] === "string" ? query["search"] : "";
   const page = Math.max(1, Math.floor(Number(query["page"])) || 1);
-  const first = await orNotFound(listPatients(ctx, { search: search.slice(0, 100), page }));
+  const first = await orNotFound(listPatients(ctx, { search: search.slice(0, 100), page, withTotal: true }));
   return (
     <Page>
       <PageTitle

@@ -1,12 +1,12 @@
 import type { MonthView } from "@withy/contracts/reports";
 import { plainDateWords } from "@withy/core/date-words";
 import { ButtonLink } from "@withy/ui/button";
-import { ChoiceLinks } from "@withy/ui/choice";
 import { Glyph } from "@withy/ui/glyph";
 import { PageTitle } from "@withy/ui/page";
 import Link from "next/link";
 import { monthAddress, monthOn } from "../month-address";
 import { PrintButton } from "./print-button";
+import { SiteChoice } from "./site-choice";
 
 /** "November 2026" with the ways to another month and to one site. */
 export function MonthTitle({ month }: { month: MonthView }) {
@@ -36,9 +36,7 @@ export function MonthTitle({ month }: { month: MonthView }) {
       actions={
         <>
           {month.sites.length > 1 && (
-            <ChoiceLinks
-              label="Sites"
-              as={Link}
+            <SiteChoice
               items={[
                 { href: monthAddress(month.month, null), label: "All sites", current: siteId === null },
                 ...month.sites.map((site) => ({
