@@ -30,8 +30,7 @@ async function type(text: string) {
   const field = screen.getByLabelText<HTMLInputElement>("Patient");
   await act(async () => {
     field.focus();
-    // Only input that a person typed opens the list.
-    fireEvent.input(field, { target: { value: text }, inputType: "insertText" });
+    fireEvent.change(field, { target: { value: text } });
   });
   return field;
 }
@@ -55,6 +54,21 @@ test("a newer keystroke cancels the older question, and arrows and Enter take an
   await act(async () => void fireEvent.keyDown(field, { key: "Enter" }));
   await waitFor(() => expect(taken).toEqual(["b"]));
   expect(field.value).toBe("Eleanor Tame");
+});
+
+test("Escape closes the list and not what is around it, and words that chose nothing stay", async () => {
+  let reached = 0;
+  document.addEventListener("keydown", () => {
+    reached += 1;
+  });
+  render(<Harness search={async () => people} report={() => {}} />);
+  const field = await type("el");
+  await screen.findByRole("option", { name: /Eleri/ });
+  await act(async () => void fireEvent.keyDown(field, { key: "Escape" }));
+  expect(field.getAttribute("aria-expanded")).toBe("false");
+  expect(reached).toBe(0);
+  await act(async () => field.blur());
+  expect(field.value).toBe("el");
 });
 
 test("one letter does not ask, and no match says what to do", async () => {

@@ -1,8 +1,8 @@
 "use client";
-import { Combobox as Base } from "@base-ui/react/combobox";
-import { type ReactNode, useEffect, useRef, useState } from "react";
+import { type KeyboardEvent, type ReactNode, useEffect, useId, useRef, useState } from "react";
 import { describedBy, Field } from "./field";
 import { Glyph } from "./glyph";
+import { type SearchAnswer, useServerSearch } from "./use-server-search";
 
 export interface ComboboxOption {
   id: string;
@@ -27,92 +27,139 @@ export interface ComboboxProps<Option extends ComboboxOption> {
   autoFocus?: boolean;
 }
 
-type Answer<Option> = { state: "idle" | "asking" | "failed" | "answered"; options: readonly Option[] };
-
-const pauseMs = 150;
-
-function useServerSearch<Option>(search: ComboboxProps<Option & ComboboxOption>["search"], from: number) {
-  const [answer, setAnswer] = useState<Answer<Option>>({ state: "idle", options: [] });
-  const running = useRef<AbortController | null>(null);
-  const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
-  const stop = () => {
-    clearTimeout(timer.current);
-    running.current?.abort();
-  };
-  useEffect(() => stop, []);
-  const ask = (text: string) => {
-    stop();
-    if (text.trim().length < from) return setAnswer({ state: "idle", options: [] });
-    const controller = new AbortController();
-    running.current = controller;
-    setAnswer((before) => ({ state: "asking", options: before.options }));
-    timer.current = setTimeout(() => {
-      search(text.trim(), controller.signal).then(
-        (options) => !controller.signal.aborted && setAnswer({ state: "answered", options }),
-        () => !controller.signal.aborted && setAnswer({ state: "failed", options: [] }),
-      );
-    }, pauseMs);
-  };
-  return { answer, ask };
-}
-
-function says<Option>(answer: Answer<Option>, from: number): string {
-  if (answer.state === "asking") return "Looking";
+function says<Option>(answer: SearchAnswer<Option>, from: number): string {
+  if (answer.state === "asking") return answer.options.length > 0 ? "" : "Looking";
   if (answer.state === "failed") return "The search did not answer. Check the connection and type again.";
   if (answer.state === "answered" && answer.options.length === 0)
     return "No match. Try fewer letters or another spelling.";
   return answer.state === "idle" ? `Type ${from} letters or more` : "";
 }
 
-/** Finds one of many by typing; arrows move, Enter takes, Escape closes. */
-export function Combobox<Option extends ComboboxOption>(props: ComboboxProps<Option>) {
-  const { id, label, value, onChange, search, from = 2, hint, error, after } = props;
+/** Text, list and cursor of the field. The value changes only when an option is taken or the text is emptied. */
+function useCombobox<Option extends ComboboxOption>({
+  value,
+  onChange,
+  search,
+  from = 2,
+}: ComboboxProps<Option>) {
   const { answer, ask } = useServerSearch<Option>(search, from);
-  const items =
-    value && !answer.options.some((o) => o.id === value.id)
-      ? [...answer.options, value]
-      : [...answer.options];
-  const said = says(answer, from);
+  const [text, setText] = useState(value?.label ?? "");
+  const [isOpen, setIsOpen] = useState(false);
+  const [active, setActive] = useState(0);
+  const shown = useRef(value);
+  useEffect(() => {
+    if (shown.current?.id === value?.id) return;
+    shown.current = value;
+    setText(value?.label ?? "");
+  }, [value]);
+  const { options } = answer;
+  const at = Math.min(active, Math.max(0, options.length - 1));
+
+  const take = (option: Option | null) => {
+    shown.current = option;
+    setText(option?.label ?? "");
+    setIsOpen(false);
+    onChange(option);
+  };
+  const type = (typed: string) => {
+    setText(typed);
+    setActive(0);
+    ask(typed);
+    setIsOpen(typed !== "");
+    if (typed === "" && value) take(null);
+  };
+  /** Leaving the field keeps what was chosen; words that chose nothing stay as typed. */
+  const leave = () => {
+    setIsOpen(false);
+    if (value) setText(value.label);
+  };
+  const step = (by: 1 | -1) => {
+    setIsOpen(true);
+    if (isOpen && options.length > 0) setActive((at + by + options.length) % options.length);
+  };
+  const onKeyDown = (event: KeyboardEvent) => {
+    const option = options[at];
+    if (event.key === "ArrowDown") step(1);
+    else if (event.key === "ArrowUp") step(-1);
+    else if (event.key === "Enter" && isOpen && option) take(option);
+    else if (event.key === "Escape" && isOpen) {
+      setIsOpen(false);
+      // The same key would close the dialog around the field.
+      event.nativeEvent.stopImmediatePropagation();
+    } else return;
+    event.preventDefault();
+  };
+  return { answer, options, text, isOpen, at, take, type, leave, onKeyDown };
+}
+
+/** Finds one of many by typing; arrows move, Enter takes, Escape closes the list. */
+export function Combobox<Option extends ComboboxOption>(props: ComboboxProps<Option>) {
+  const { id, label, hint, error, after, from = 2 } = props;
+  const list = useId();
+  const box = useCombobox(props);
+  const said = says(box.answer, from);
+  const input = useRef<HTMLInputElement>(null);
   return (
     <Field label={label} htmlFor={id} hint={hint} error={error} after={after}>
-      <Base.Root
-        items={items}
-        value={value}
-        onValueChange={onChange}
-        itemToStringLabel={(option: Option) => option.label}
-        isItemEqualToValue={(a: Option, b: Option) => a.id === b.id}
-        filter={null}
-        autoHighlight
-        onInputValueChange={(text, { reason }) => reason !== "item-press" && ask(text)}
-      >
-        <Base.InputGroup className="input shell">
-          <Base.Input
-            id={id}
-            placeholder={props.placeholder}
-            autoFocus={props.autoFocus}
-            aria-invalid={error ? true : undefined}
-            aria-describedby={describedBy(id, { hint, error })}
-          />
-          <Base.Clear aria-label="Clear">
+      <div className="input shell combo">
+        <input
+          ref={input}
+          id={id}
+          type="text"
+          role="combobox"
+          aria-autocomplete="list"
+          aria-expanded={box.isOpen}
+          aria-controls={list}
+          aria-activedescendant={box.isOpen && box.options.length > 0 ? `${list}-${box.at}` : undefined}
+          aria-invalid={error ? true : undefined}
+          aria-describedby={describedBy(id, { hint, error })}
+          autoComplete="off"
+          spellCheck={false}
+          placeholder={props.placeholder}
+          // biome-ignore lint/a11y/noAutofocus: the caller opens a dialog whose first question this is
+          autoFocus={props.autoFocus}
+          value={box.text}
+          onChange={(event) => box.type(event.target.value)}
+          onKeyDown={box.onKeyDown}
+          onBlur={box.leave}
+        />
+        {box.text !== "" && (
+          <button
+            type="button"
+            aria-label="Clear"
+            onMouseDown={(event) => event.preventDefault()}
+            onClick={() => {
+              box.type("");
+              input.current?.focus();
+            }}
+          >
             <Glyph name="cross" />
-          </Base.Clear>
-        </Base.InputGroup>
-        <Base.Portal>
-          <Base.Positioner sideOffset={4} className="z-40">
-            <Base.Popup className="popup" aria-busy={answer.state === "asking" || undefined}>
-              <Base.Status>{said && <div className="says">{said}</div>}</Base.Status>
-              <Base.List>
-                {(option: Option) => (
-                  <Base.Item key={option.id} value={option} className="option">
-                    {option.label}
-                    {option.detail && <span className="small">{option.detail}</span>}
-                  </Base.Item>
-                )}
-              </Base.List>
-            </Base.Popup>
-          </Base.Positioner>
-        </Base.Portal>
-      </Base.Root>
+          </button>
+        )}
+        <div className="popup" hidden={!box.isOpen}>
+          <div role="status">{box.isOpen && said && <div className="says">{said}</div>}</div>
+          <div id={list} role="listbox" aria-label="Matches">
+            {box.isOpen &&
+              box.options.map((option, i) => (
+                // biome-ignore lint/a11y/useKeyWithClickEvents: the field itself handles the keys of its list
+                <div
+                  key={option.id}
+                  id={`${list}-${i}`}
+                  role="option"
+                  tabIndex={-1}
+                  aria-selected={i === box.at}
+                  className="option"
+                  data-highlighted={i === box.at ? "" : undefined}
+                  onMouseDown={(event) => event.preventDefault()}
+                  onClick={() => box.take(option)}
+                >
+                  {option.label}
+                  {option.detail && <span className="small">{option.detail}</span>}
+                </div>
+              ))}
+          </div>
+        </div>
+      </div>
     </Field>
   );
 }

@@ -1,4 +1,9 @@
-import type { AppointmentView, markAppointmentInput, TodayView } from "@withy/contracts/diary";
+import type {
+  AppointmentView,
+  DiaryPulseView,
+  markAppointmentInput,
+  TodayView,
+} from "@withy/contracts/diary";
 import type { z } from "zod";
 import { get, write } from "@/api/request";
 
@@ -6,6 +11,9 @@ export type MarkArrival = z.input<typeof markAppointmentInput>;
 
 export const fetchToday = (siteIds: readonly string[], signal?: AbortSignal) =>
   get<TodayView>("/api/diary/today", { siteIds }, signal);
+
+export const fetchPulse = (siteIds: readonly string[], signal?: AbortSignal) =>
+  get<DiaryPulseView>("/api/diary/pulse", { siteIds }, signal);
 
 export const markArrival = ({ appointmentId, ...input }: MarkArrival) =>
   write<AppointmentView>("POST", `/api/diary/appointments/${appointmentId}/mark`, input);

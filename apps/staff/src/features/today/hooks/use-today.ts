@@ -1,14 +1,34 @@
-import { useQuery } from "@tanstack/react-query";
+import { useQuery, useQueryClient } from "@tanstack/react-query";
 import type { TodayView } from "@withy/contracts/diary";
-import { fetchToday } from "../api-client";
+import { useEffect } from "react";
+import { fetchPulse, fetchToday } from "../api-client";
 import { todayKeys } from "../query-keys";
 
-/** What is next at these sites; read again every two seconds, since the waiting room fills at other desks too. */
+const pulseMs = 1500;
+/** Waiting times and gaps move on by themselves. */
+const agesMs = 60_000;
+
+/** What is next at these sites. The waiting room fills at other desks too, so a cheap question is asked often. */
 export function useToday(siteIds: readonly string[], first: TodayView) {
-  return useQuery({
+  const client = useQueryClient();
+  const query = useQuery({
     queryKey: todayKeys.today(siteIds),
     queryFn: ({ signal }) => fetchToday(siteIds, signal),
     initialData: first,
-    refetchInterval: 2000,
+    refetchInterval: agesMs,
   });
+  const shown = query.data.sites.map((site) => site.id);
+  const theirs = useQuery({
+    queryKey: todayKeys.pulse(shown),
+    queryFn: ({ signal }) => fetchPulse(shown, signal),
+    refetchInterval: pulseMs,
+    staleTime: 0,
+  }).data?.pulse;
+  const ours = query.data.pulse;
+  const isIdle = !query.isFetching;
+  useEffect(() => {
+    if (theirs !== undefined && isIdle && theirs !== ours)
+      void client.invalidateQueries({ queryKey: todayKeys.all });
+  }, [theirs, ours, isIdle, client]);
+  return query;
 }
