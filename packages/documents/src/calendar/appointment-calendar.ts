@@ -42,7 +42,7 @@ export function appointmentCalendar(appointment: CalendarAppointment, isCancelle
     start: appointment.startsAt,
     end: appointment.endsAt,
     summary: `Appointment at ${appointment.practice}`,
-    description: `${appointment.withWhom}\nTo change it, ring ${appointment.phone}.`,
+    description: `${capital(appointment.withWhom)}\nTo change it, ring ${appointment.phone}.`,
     location: appointment.place,
     status: isCancelled ? ICalEventStatus.CANCELLED : ICalEventStatus.CONFIRMED,
     organizer: { name: appointment.practice, email: appointment.practiceEmail },
@@ -55,4 +55,8 @@ export function appointmentCalendar(appointment: CalendarAppointment, isCancelle
     status: ICalAttendeeStatus.ACCEPTED,
   });
   return { content: calendar.toString(), method: isCancelled ? "CANCEL" : "REQUEST" };
+}
+
+function capital(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
 }

@@ -24,7 +24,7 @@ function facts({ appointment, zone }: AppointmentMessage): { label: string; valu
     { label: "When", value: whenWords(appointment.startsAt, zone) },
     { label: "Until", value: proseTime(timeOf(appointment.endsAt, zone)) },
     { label: "Where", value: appointment.place },
-    { label: "Who", value: appointment.withWhom },
+    { label: "With", value: appointment.withWhom.replace(/^with /i, "") },
   ];
 }
 

@@ -1,13 +1,15 @@
 "use client";
 import type { LetterView } from "@withy/contracts/letters";
 import { AlertLine } from "@withy/ui/alert-line";
+import dynamic from "next/dynamic";
 import { useState } from "react";
 import { actorWords } from "../letter-words";
 import { LetterHead } from "./letter-head";
 import { LetterSide } from "./letter-side";
-import { SendDialog } from "./send-dialog";
 import { SentenceSource } from "./sentence-source";
 import { Signature } from "./signature";
+
+const SendDialog = dynamic(() => import("./send-dialog").then((part) => part.SendDialog), { ssr: false });
 
 /** A signed letter, or a colleague's draft: every word as it stands, each with its source. */
 export function ReadLetter({ letter }: { letter: LetterView }) {

@@ -163,7 +163,7 @@ describe("writing a letter", () => {
 describe("signing a letter", () => {
   const sign = async () => {
     fireEvent.click(screen.getByRole("button", { name: /Sign and send…/ }));
-    return within(await screen.findByRole("dialog"));
+    return within(await screen.findByRole("dialog", {}, { timeout: 10_000 }));
   };
 
   it("asks how the episode ended before anything is written", async () => {

@@ -2,6 +2,7 @@
 import type { LetterView } from "@withy/contracts/letters";
 import { AlertLine } from "@withy/ui/alert-line";
 import { Button } from "@withy/ui/button";
+import dynamic from "next/dynamic";
 import { useState } from "react";
 import { ApiError } from "@/api/request";
 import { useShortcut } from "@/components/shortcuts/shortcut-provider";
@@ -11,9 +12,11 @@ import { AddSection } from "./add-section";
 import { LetterHead } from "./letter-head";
 import { LetterSide } from "./letter-side";
 import { RecipientFields } from "./recipient-fields";
-import { SignDialog } from "./sign-dialog";
 import { Signature } from "./signature";
 import { WriteSection } from "./write-section";
+
+// Fetched when it is first needed: most looks at a letter sign nothing.
+const SignDialog = dynamic(() => import("./sign-dialog").then((part) => part.SignDialog), { ssr: false });
 
 /** The page that the reader gets, with every word open to its writer and its source in the gutter. */
 export function WriteLetter({ letter }: { letter: LetterView }) {
