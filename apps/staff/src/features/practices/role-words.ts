@@ -12,13 +12,17 @@ export interface Held {
   siteId: string | null;
 }
 
-/** "Owner everywhere, therapist at Saltgate". */
+/** "Owner everywhere, Therapist at Saltgate and Tollhouse Lane". */
 export function heldWords(roles: readonly Held[], sites: readonly { id: string; name: string }[]): string {
   if (roles.length === 0) return "none";
-  return roles
-    .map(({ role, siteId }) => {
-      const site = sites.find((s) => s.id === siteId);
-      return `${roleWords[role]}${siteId === null ? " everywhere" : ` at ${site?.name ?? "a closed site"}`}`;
+  return [...new Set(roles.map(({ role }) => role))]
+    .map((role) => {
+      const held = roles.filter((one) => one.role === role);
+      if (held.some(({ siteId }) => siteId === null)) return `${roleWords[role]} everywhere`;
+      const names = sites
+        .filter(({ id }) => held.some(({ siteId }) => siteId === id))
+        .map(({ name }) => name);
+      return `${roleWords[role]} at ${names.join(" and ")}`;
     })
     .join(", ");
 }

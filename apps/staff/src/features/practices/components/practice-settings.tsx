@@ -1,9 +1,8 @@
 import type { PracticeSettingsView, ServiceSettings, SiteSettings } from "@withy/contracts/practices";
 import { formatMoney } from "@withy/core/money";
 import { SectionHead } from "@withy/ui/section-head";
-
-const weekdays = ["Mon", "Tue", "Wed", "Thu", "Fri", "Sat", "Sun"];
-const dayName = (weekday: number) => weekdays[weekday - 1] ?? "";
+import { hoursWords } from "../hours-words";
+import { workplaces } from "../workplaces";
 
 /** How the practice is set up: sites and rooms, services and prices, working patterns. */
 export function PracticeSettings({ settings }: { settings: PracticeSettingsView }) {
@@ -60,9 +59,7 @@ function SiteLine({ site }: { site: SiteSettings }) {
         {[...site.addressLines, site.postcode, site.phone].filter(Boolean).join(", ")}
         {site.isStepFree && <span className="soft">. Step-free</span>}
       </td>
-      <td data-label="Open">
-        {site.hours.map((h) => `${dayName(h.weekday)} ${h.opensAt} to ${h.closesAt}`).join(", ") || "Closed"}
-      </td>
+      <td data-label="Open">{hoursWords(site.hours) || "Closed"}</td>
       <td data-label="Rooms">{site.rooms.map((room) => room.name).join(", ") || "None"}</td>
     </tr>
   );
@@ -104,25 +101,20 @@ function Patterns({ settings }: { settings: PracticeSettingsView }) {
           <tr>
             <th scope="col">Therapist</th>
             <th scope="col">Site</th>
-            <th scope="col">Day</th>
             <th scope="col">Hours</th>
             <th scope="col">Breaks</th>
           </tr>
         </thead>
         <tbody>
-          {settings.patterns.map((pattern) => (
-            <tr key={pattern.id}>
-              <th scope="row">{pattern.therapistName}</th>
-              <td data-label="Site">{pattern.siteName}</td>
-              <td data-label="Day">
-                {dayName(pattern.weekday)}
-                {pattern.everyWeeks > 1 && <span className="soft">, every {pattern.everyWeeks} weeks</span>}
-              </td>
+          {workplaces(settings.patterns).map((place) => (
+            <tr key={place.id}>
+              <th scope="row">{place.therapistName}</th>
+              <td data-label="Site">{place.siteName}</td>
               <td data-label="Hours" className="num">
-                {pattern.startsAt} to {pattern.endsAt}
+                {place.hours}
               </td>
               <td data-label="Breaks" className="num">
-                {pattern.breaks.map((b) => `${b.label} ${b.startsAt} to ${b.endsAt}`).join(", ") || "None"}
+                {place.breaks || "None"}
               </td>
             </tr>
           ))}
