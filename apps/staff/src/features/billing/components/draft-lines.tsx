@@ -16,6 +16,8 @@ interface DraftLinesProps {
   today: string;
   lines: readonly InvoiceLineView[];
   busy: boolean;
+  /** Something was typed that is not saved yet. */
+  onDirty: () => void;
   onChange: (lines: KeptLine[]) => void;
 }
 
@@ -38,7 +40,7 @@ function read(text: LineText): { quantity: number; discountBasisPoints: number }
 }
 
 /** Quantity and discount of each line, and a way to take the line off. */
-export function DraftLines({ today, lines, busy, onChange }: DraftLinesProps) {
+export function DraftLines({ today, lines, busy, onDirty, onChange }: DraftLinesProps) {
   const [texts, setTexts] = useState<Record<string, LineText>>({});
   const now = lines.map((line) => ({ line, text: texts[line.id] ?? textOf(line) }));
   const kept = now.flatMap(({ line, text }) => {
@@ -47,7 +49,10 @@ export function DraftLines({ today, lines, busy, onChange }: DraftLinesProps) {
   });
   const isWhole = kept.length === lines.length;
   const isChanged = Object.keys(texts).length > 0;
-  const change = (id: string, text: LineText) => setTexts((all) => ({ ...all, [id]: text }));
+  const change = (id: string, text: LineText) => {
+    setTexts((all) => ({ ...all, [id]: text }));
+    onDirty();
+  };
   return (
     <section className="draftlines" aria-labelledby="lines-title">
       <SectionHead id="lines-title" title="Lines" level={3} />

@@ -4,6 +4,7 @@ import { formatMoney } from "@withy/core/money";
 import { Button } from "@withy/ui/button";
 import { ErrorSummary } from "@withy/ui/error-summary";
 import { useRouter } from "next/navigation";
+import { useState } from "react";
 import { problemItems } from "@/api/form-problems";
 import { useShortcut } from "@/components/shortcuts/shortcut-provider";
 import { invoicePdfAddress } from "../api-client";
@@ -18,6 +19,9 @@ export function DraftPanel({ invoice, may }: { invoice: InvoiceView; may: Invoic
   const edit = useEditDraft();
   const issue = useIssueInvoice();
   const discard = useDiscardDraft();
+  // Counts the saves: what was typed is dropped once it is saved, and kept while it is refused.
+  const [saves, setSaves] = useState(0);
+  const [isDirty, setDirty] = useState(false);
   const version = { invoiceId: invoice.id, version: invoice.version };
   const failed = edit.error ?? issue.error ?? discard.error;
   const isBusy = edit.isPending || issue.isPending || discard.isPending;
@@ -26,7 +30,14 @@ export function DraftPanel({ invoice, may }: { invoice: InvoiceView; may: Invoic
     quantity,
     discountBasisPoints,
   }));
-  useShortcut("issue", () => issue.mutate(version), may.issue && !isBusy);
+  const save = (lines: Parameters<typeof edit.mutate>[0]["lines"]) => {
+    const onSuccess = () => {
+      setSaves((n) => n + 1);
+      setDirty(false);
+    };
+    edit.mutate({ ...version, lines }, { onSuccess });
+  };
+  useShortcut("issue", () => issue.mutate(version), may.issue && !isBusy && !isDirty);
   return (
     <aside className="pay" aria-label="Draft">
       <p className="state">
@@ -38,23 +49,37 @@ export function DraftPanel({ invoice, may }: { invoice: InvoiceView; may: Invoic
         attempt={edit.submittedAt + issue.submittedAt}
       />
       {may.issue && (
-        <Button kind="primary" size="wide" shortcut="I" busy={isBusy} onClick={() => issue.mutate(version)}>
+        <Button
+          kind="primary"
+          size="wide"
+          shortcut="I"
+          busy={isBusy}
+          disabled={isDirty}
+          onClick={() => issue.mutate(version)}
+        >
           Issue {formatMoney(invoice.totalPence)}
         </Button>
       )}
-      <p className="hint">Once issued it gets the next number and cannot be changed.</p>
+      <p className="hint">
+        {isDirty
+          ? "Save the lines first, so that what is issued is what you see."
+          : "Once issued it gets the next number and cannot be changed."}
+      </p>
       {may.draft && (
         <>
           <DraftLines
+            key={`lines-${saves}`}
             today={invoice.today}
             lines={invoice.lines}
             busy={isBusy}
-            onChange={(lines) => edit.mutate({ ...version, lines })}
+            onDirty={() => setDirty(true)}
+            onChange={save}
           />
           <AddItem
+            key={`item-${saves}`}
             invoiceId={invoice.id}
             busy={isBusy}
-            onAdd={(item) => edit.mutate({ ...version, lines: [...kept, item] })}
+            onAdd={(item) => save([...kept, item])}
           />
         </>
       )}

@@ -26,9 +26,7 @@ export function InvoicePanel({ invoice, may, returnedFrom }: InvoicePanelProps) 
     <aside className="pay" aria-label="Payment">
       <StateLine invoice={invoice} />
       {card && may.takePayment && <OpenCardPayment card={card} />}
-      {invoice.freePence > 0 && may.takePayment && (
-        <PaymentForm key={`${invoice.version}`} invoice={invoice} />
-      )}
+      {invoice.freePence > 0 && may.takePayment && <PaymentForm invoice={invoice} />}
       <MoneyTaken invoice={invoice} mayRefund={may.refund} />
       <p className="more">
         <a

@@ -23,7 +23,7 @@ export function InvoiceScreen({ first, may, returnedFrom }: InvoiceScreenProps) 
       <InvoiceHistory steps={invoice.steps} today={invoice.today} />
       <InvoiceFolio invoice={invoice} />
       {invoice.state === "draft" ? (
-        <DraftPanel key={invoice.version} invoice={invoice} may={may} />
+        <DraftPanel invoice={invoice} may={may} />
       ) : (
         <InvoicePanel invoice={invoice} may={may} returnedFrom={returnedFrom} />
       )}

@@ -37,7 +37,11 @@ export function PaymentForm({ invoice }: { invoice: InvoiceView }) {
     if (sentence !== null || pence === null) return;
     const input = { invoiceId: invoice.id, amountPence: pence };
     if (method === "card") start.mutate(input);
-    else take.mutate({ ...input, method, reference });
+    else take.mutate({ ...input, method, reference }, { onSuccess: (view) => startAgain(view.freePence) });
+  };
+  const startAgain = (freePence: number) => {
+    setAmount(formatMoney(freePence).slice(1));
+    setReference("");
   };
   const isWhole = pence === invoice.owedPence;
   return (
