@@ -51,42 +51,38 @@ function diaryDeeds({ rows }: Stage, house: House, visits: readonly Visit[]): De
 }
 
 function clinicalDeeds({ rows }: Stage, house: House): Deed[] {
-  const signed = rows
-    .of(notes)
-    .flatMap((note) =>
-      note.practiceId === house.practiceId && note.signedAt
-        ? [
-            {
-              at: note.signedAt,
-              actorId: note.authorId,
-              action: "note.signed",
-              subjectKind: "note",
-              subjectId: note.id,
-              patientId: note.patientId,
-              siteId: null,
-              detail: { version: 2 },
-            },
-          ]
-        : [],
-    );
-  const written = rows
-    .of(letters)
-    .flatMap((letter) =>
-      letter.practiceId === house.practiceId && letter.signedAt
-        ? [
-            {
-              at: letter.signedAt,
-              actorId: letter.authorId,
-              action: "letter.signed",
-              subjectKind: "letter",
-              subjectId: letter.id,
-              patientId: letter.patientId,
-              siteId: null,
-              detail: { version: 2 },
-            },
-          ]
-        : [],
-    );
+  const signed = rows.of(notes).flatMap((note) =>
+    note.practiceId === house.practiceId && note.signedAt
+      ? [
+          {
+            at: note.signedAt,
+            actorId: note.authorId,
+            action: "note.signed",
+            subjectKind: "note",
+            subjectId: note.id,
+            patientId: note.patientId,
+            siteId: null,
+            detail: { version: 2 },
+          },
+        ]
+      : [],
+  );
+  const written = rows.of(letters).flatMap((letter) =>
+    letter.practiceId === house.practiceId && letter.signedAt
+      ? [
+          {
+            at: letter.signedAt,
+            actorId: letter.authorId,
+            action: "letter.signed",
+            subjectKind: "letter",
+            subjectId: letter.id,
+            patientId: letter.patientId,
+            siteId: null,
+            detail: { version: 2 },
+          },
+        ]
+      : [],
+  );
   return [...signed, ...written];
 }
 
