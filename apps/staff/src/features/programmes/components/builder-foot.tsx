@@ -6,7 +6,7 @@ import type { Programme } from "@withy/clinical/programmes/programme";
 import { clockDuration } from "@withy/core/date-words";
 import { Button } from "@withy/ui/button";
 import { Glyph } from "@withy/ui/glyph";
-import type { BuilderSheet } from "./programme-builder";
+import type { BuilderSheet } from "../item-actions";
 
 function endWords(programme: Programme): string {
   const end = clockDuration(sessionTime(programme).elapsedSeconds);

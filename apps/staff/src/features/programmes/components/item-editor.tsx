@@ -1,11 +1,11 @@
 "use client";
 import { type Support, supports, supportWords } from "@withy/clinical/exercises/exercise";
 import { findExercise } from "@withy/clinical/exercises/library";
-import type { ItemSide, ProgrammeItem } from "@withy/clinical/programmes/programme";
+import type { ItemSide, Programme, ProgrammeItem } from "@withy/clinical/programmes/programme";
 import { Button } from "@withy/ui/button";
 import { Select } from "@withy/ui/select";
 import { TextInput } from "@withy/ui/text-input";
-import type { ItemLineProps } from "./item-line";
+import type { ItemActions } from "../item-actions";
 import { NumberBox } from "./number-box";
 
 type Count =
@@ -56,7 +56,19 @@ function supportOptions(item: ProgrammeItem) {
 }
 
 /** The details of the chosen line, under it. */
-export function ItemEditor({ programme, item, index, actions, name }: ItemLineProps & { name: string }) {
+export function ItemEditor({
+  programme,
+  item,
+  index,
+  actions,
+  name,
+}: {
+  programme: Programme;
+  item: ProgrammeItem;
+  index: number;
+  actions: ItemActions;
+  name: string;
+}) {
   const set = (change: Partial<ProgrammeItem>) => actions.change(item.id, change);
   const isSided = findExercise(item.exercise)?.sides === "one-at-a-time";
   return (

@@ -4,19 +4,12 @@ import { findExercise, findForm } from "@withy/clinical/exercises/library";
 import type { Programme, ProgrammeItem } from "@withy/clinical/programmes/programme";
 import { clockDuration } from "@withy/core/date-words";
 import type { DragEvent, KeyboardEvent } from "react";
+import type { ItemActions } from "../item-actions";
 import { ExerciseFigure } from "./exercise-figure";
 import { ItemEditor } from "./item-editor";
 import { LadderCell } from "./ladder-cell";
 
-export interface ItemActions {
-  choose: (id: string | null) => void;
-  change: (id: string, change: Partial<ProgrammeItem>) => void;
-  climb: (id: string, way: "easier" | "harder") => void;
-  move: (id: string, to: number) => void;
-  remove: (id: string) => void;
-}
-
-export interface ItemLineProps {
+interface ItemLineProps {
   programme: Programme;
   item: ProgrammeItem;
   index: number;
@@ -68,7 +61,9 @@ export function ItemLine(props: ItemLineProps) {
         <Needs item={item} />
         <Dose programme={programme} item={item} />
       </div>
-      {isChosen && canWrite && <ItemEditor {...props} name={name} />}
+      {isChosen && canWrite && (
+        <ItemEditor programme={programme} item={item} index={index} actions={actions} name={name} />
+      )}
     </li>
   );
 }

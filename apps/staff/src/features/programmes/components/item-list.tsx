@@ -2,7 +2,8 @@
 import { startTimes } from "@withy/clinical/programmes/equation";
 import type { Programme } from "@withy/clinical/programmes/programme";
 import { type DragEvent, useState } from "react";
-import { type ItemActions, ItemLine } from "./item-line";
+import type { ItemActions } from "../item-actions";
+import { ItemLine } from "./item-line";
 
 /** The lines in their order. A line's number can be dragged; Alt with an arrow or the buttons do the same. */
 export function ItemList({

@@ -9,6 +9,7 @@ import { useShortcut } from "@/components/shortcuts/shortcut-provider";
 import { handoutAddress } from "../api-client";
 import { setEquipmentMissing, setMode } from "../draft-changes";
 import { useBuilder } from "../hooks/use-builder";
+import type { BuilderSheet } from "../item-actions";
 import { BuilderFoot } from "./builder-foot";
 import { BuilderHead } from "./builder-head";
 import { BuilderMessages } from "./builder-messages";
@@ -23,8 +24,6 @@ const AddExerciseDialog = dynamic(() => import("./add-exercise-dialog").then((m)
 const EquipmentDialog = dynamic(() => import("./equipment-dialog").then((m) => m.EquipmentDialog));
 const SessionDialog = dynamic(() => import("./session-dialog").then((m) => m.SessionDialog));
 const IssueDialog = dynamic(() => import("./issue-dialog").then((m) => m.IssueDialog));
-
-export type BuilderSheet = "add" | "equipment" | "session" | "issue" | null;
 
 /** The programme with its clock, and beside it the paper that the patient will hold. */
 export function ProgrammeBuilder({ first }: { first: ProgrammeView }) {
