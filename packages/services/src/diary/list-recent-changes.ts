@@ -21,7 +21,6 @@ interface ChangeRow {
   starts_before: string | null;
   starts_after: string;
   undone_at: string | null;
-  updated_at: string;
   zone: string;
 }
 
@@ -66,7 +65,7 @@ export const listRecentChanges = verb(
         concat(p.given_name, ' ', p.family_name) as patient_name, c.appointment_id, a.version, a.state as state_now,
         json_value(c.before, '$.state') as state_before, json_value(c.after, '$.state') as state_after,
         json_value(c.before, '$.startsAt') as starts_before, json_value(c.after, '$.startsAt') as starts_after,
-        c.undone_at, a.updated_at, s.zone
+        c.undone_at, s.zone
       from (${sql.join(ends, sql` union all `)}) l
         join appointment_changes c on c.practice_id = ${ctx.practiceId} and c.id = l.id
         join appointments a on a.practice_id = c.practice_id and a.id = c.appointment_id
@@ -95,7 +94,8 @@ export const listRecentChanges = verb(
         (row.kind === "cancelled" || row.kind === "marked") &&
         row.undone_at === null &&
         row.state_now === row.state_after &&
-        row.updated_at === row.changed_at,
+        // Newest first: an earlier one has something done after it.
+        once.find((other) => other.appointment_id === row.appointment_id) === row,
       version: row.version,
     }));
   },

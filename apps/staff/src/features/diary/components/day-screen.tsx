@@ -37,6 +37,13 @@ function visitById(day: DiaryDayView, id: string | null): DayAppointment | null 
   return day.columns.flatMap((column) => column.appointments).find((visit) => visit.id === id) ?? null;
 }
 
+/** The week of whoever gives the open visit, else of the column under the cursor. */
+function weekHref(day: DiaryDayView, cursor: Cursor, chosen: DayAppointment | null): string {
+  const column = day.by === "therapist" ? day.columns[cursor.column]?.id : undefined;
+  const therapist = chosen?.therapistId ?? column;
+  return `/diary/week?${new URLSearchParams({ day: day.day, ...(therapist ? { therapist } : {}) })}`;
+}
+
 /** The day's diary: grid, agenda on a phone, the sheet of one visit, and the dialogs of its verbs. */
 export function DayScreen({ first, sites, today, may }: DayScreenProps) {
   const router = useRouter();
@@ -82,7 +89,7 @@ export function DayScreen({ first, sites, today, may }: DayScreenProps) {
         canBook={may.book}
         onDay={goTo}
         onSites={(siteIds) => change({ siteIds, at: null })}
-        weekHref={`/diary/week?day=${day.day}${day.by === "therapist" && day.columns[cursor.column] ? `&therapist=${day.columns[cursor.column]?.id}` : ""}`}
+        weekHref={weekHref(day, cursor, chosen)}
       />
       <div className="dayalert">
         {verbs.problem && (
@@ -134,7 +141,9 @@ export function DayScreen({ first, sites, today, may }: DayScreenProps) {
         onClose={() => setDialog(null)}
         onShow={(view) => {
           setDialog(null);
-          change({ at: view.id, day: view.day === today ? undefined : view.day });
+          const isShown = day.sites.some((site) => site.id === view.site.id);
+          const siteIds = isShown ? address.siteIds : [view.site.id];
+          change({ at: view.id, day: view.day === today ? undefined : view.day, siteIds });
         }}
       />
     </Page>

@@ -43,7 +43,7 @@ export function MoveDialog({ view, choices, today, onClose, onMoved }: MoveDialo
     move.mutate(
       {
         ...input,
-        ...(roomId ? { roomId } : {}),
+        roomId: roomId || null,
         overrideReason: form.reason || null,
         origin: {
           startsAt: view.startsAt,

@@ -5,6 +5,7 @@ import type { AppointmentState } from "@withy/diary/appointment-states";
 import { stateFacts } from "@withy/diary/appointment-states";
 import { Button } from "@withy/ui/button";
 import { Key } from "@withy/ui/key";
+import { StateMark } from "@withy/ui/state-mark";
 import { AppointmentStateMark, appointmentStateLook } from "@/components/appointment-state-mark";
 
 export interface SheetVerbs {
@@ -54,7 +55,11 @@ export function SheetStates({ view, verbs }: { view: AppointmentView; verbs: She
             disabled={verbs.isBusy}
             onClick={() => (to === "cancelled" ? verbs.onCancel() : verbs.onMark(to as Mark))}
           >
-            <AppointmentStateMark code={to} bare />
+            {to === "cancelled" ? (
+              <StateMark code={to} label="Cancel, and say why" edge="struck" bare />
+            ) : (
+              <AppointmentStateMark code={to} bare />
+            )}
             {keys[to] && <Key>{keys[to]}</Key>}
           </button>
         </div>
