@@ -20,7 +20,7 @@ export interface NotePageProps {
 
 /** The note of one visit: written while it is a draft of one's own, else read. */
 export function NotePage({ note: first, measures: firstMeasures, day: firstDay }: NotePageProps) {
-  const note = useNote(first).data;
+  const note = useNote(first);
   const measures = useMeasures(note.episode.id, firstMeasures).data;
   const day = useDayList(firstDay).data;
   const until = note.visitEndsAt === null ? "" : ` to ${clockAt(note.visitEndsAt, note.zone)}`;

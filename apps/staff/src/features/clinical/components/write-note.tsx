@@ -3,6 +3,7 @@ import { emptyHeadings } from "@withy/clinical/notes/check-note";
 import { noteKindLabels } from "@withy/clinical/notes/headings";
 import { useState } from "react";
 import { useShortcut } from "@/components/shortcuts/shortcut-provider";
+import { useNoteChange } from "../hooks/use-note";
 import { useNoteDraft } from "../hooks/use-note-draft";
 import { useSignNote } from "../hooks/use-sign-note";
 import { ClashDialog } from "./clash-dialog";
@@ -30,7 +31,7 @@ export function WriteNote({ note, measures, day, visitDay, visitWords }: NotePar
   const [open, setOpen] = useState<Open>(null);
   const [isRecording, setIsRecording] = useState(false);
   const [missing, setMissing] = useState<readonly string[]>([]);
-  const [flags, setFlags] = useState({ redFlags: note.episode.redFlags, version: note.episode.version });
+  const hold = useNoteChange(note);
   const openSign = () => {
     setMissing(emptyHeadings(note.kind, draft.body).map(({ key }) => key));
     sign.reset();
@@ -66,7 +67,7 @@ export function WriteNote({ note, measures, day, visitDay, visitWords }: NotePar
         <NoteEditor
           note={note}
           draft={draft}
-          redFlags={flags.redFlags}
+          redFlags={note.episode.redFlags}
           measures={measures}
           visitDay={visitDay}
           missing={missing}
@@ -109,7 +110,11 @@ export function WriteNote({ note, measures, day, visitDay, visitWords }: NotePar
         />
       )}
       {open === "flags" && (
-        <RedFlagsDialog episode={{ ...note.episode, ...flags }} onSaved={setFlags} onClose={close} />
+        <RedFlagsDialog
+          episode={note.episode}
+          onSaved={(saved) => hold((held) => ({ ...held, episode: { ...held.episode, ...saved } }))}
+          onClose={close}
+        />
       )}
       {open === "clash" && draft.clash && <ClashDialog note={note} draft={draft} onClose={close} />}
     </>

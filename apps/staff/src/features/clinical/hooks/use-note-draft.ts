@@ -1,9 +1,10 @@
 import type { NoteView, StaleNote } from "@withy/contracts/clinical";
-import { useEffect, useState, useSyncExternalStore } from "react";
+import { useEffect, useRef, useState, useSyncExternalStore } from "react";
 import { ApiError } from "@/api/request";
 import { saveNoteDraft } from "../api-client";
 import { type KeeperPorts, NoteKeeper } from "../note-keeper";
 import { dropCopy, keepCopy, readCopy } from "../unsent-copy";
+import { useNoteChange } from "./use-note";
 
 function explain(error: unknown): ReturnType<KeeperPorts["explain"]> {
   if (!(error instanceof ApiError))
@@ -14,10 +15,20 @@ function explain(error: unknown): ReturnType<KeeperPorts["explain"]> {
 
 /** The text being written, with the keeper that saves it. */
 export function useNoteDraft(note: NoteView) {
+  const hold = useRef(useNoteChange(note));
   const [keeper] = useState(
     () =>
       new NoteKeeper(note, {
-        save: saveNoteDraft,
+        save: async (input) => {
+          const saved = await saveNoteDraft(input);
+          hold.current((held) => ({
+            ...held,
+            body: input.body,
+            version: saved.version,
+            updatedAt: saved.savedAt,
+          }));
+          return saved;
+        },
         explain,
         copies: {
           read: () => readCopy(note.id),
