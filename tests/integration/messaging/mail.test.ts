@@ -73,6 +73,7 @@ describe("a mail through the gateway into the mailbox", () => {
     const [caught] = JSON.parse(await read("/mailbox.json?to=x@post.example"));
     const shown = await fetch(`http://127.0.0.1:${fakes.httpPort}/mailbox/${caught.id}/html`);
     expect(shown.headers.get("content-security-policy")).toMatch(/default-src 'none'.*sandbox/);
+    expect(await shown.text()).toContain('<base target="_top">');
   });
 
   it.each([

@@ -42,6 +42,14 @@ function jsonOf(mail: CaughtMail) {
   };
 }
 
+/** A link in the mail leaves the frame: the app lets no other site frame it. */
+function framed(html: string): string {
+  const base = '<base target="_top">';
+  return /<head[^>]*>/i.test(html)
+    ? html.replace(/<head[^>]*>/i, (head) => `${head}${base}`)
+    : `${base}${html}`;
+}
+
 function sendFile(res: ServerResponse, mail: CaughtMail, index: number): void {
   const file = mail.parsed.attachments[index];
   if (!file) {
@@ -88,7 +96,7 @@ export function handleMailbox(store: MailStore, req: IncomingMessage, res: Serve
   const mail = store.find(id);
   if (!mail) send(res, 404, "text/plain; charset=utf-8", "No such mail. It may have been cleared away.");
   else if (part === "html")
-    send(res, 200, html, mail.parsed.html || "", {
+    send(res, 200, html, framed(mail.parsed.html || ""), {
       "content-security-policy": `${policy}; sandbox allow-popups allow-top-navigation-by-user-activation`,
     });
   else if (part === "files") sendFile(res, mail, Number(index ?? -1));

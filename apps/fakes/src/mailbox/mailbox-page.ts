@@ -45,7 +45,8 @@ const subjectOf = (mail: CaughtMail): string => mail.parsed.subject ?? "(no subj
 
 export function listPage(mails: readonly CaughtMail[], to: string | null): string {
   const rows = mails.map((mail) => {
-    const files = mail.parsed.attachments.map((file) => file.filename ?? file.contentType).join(", ");
+    // A calendar also travels as a part without a name, which mail readers use and people never see.
+    const files = mail.parsed.attachments.flatMap((file) => file.filename ?? []).join(", ");
     return `<tr><td class="when">${clock.format(mail.receivedAt)}</td><td>${escaped(mail.envelopeTo.join(", "))}</td><td><a href="/mailbox/${mail.id}">${escaped(subjectOf(mail))}</a></td><td>${escaped(files)}</td></tr>`;
   });
   const table =

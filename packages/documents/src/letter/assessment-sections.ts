@@ -74,7 +74,7 @@ export function scales(facts: DischargeFacts): LetterSentence[] {
     assembled("scales", measure.key, measureWords(measure), {
       kind: "measure",
       id: measure.last.recordId,
-      label: `${measure.name}, ${shortDate(measure.last.on, facts.today)}`.slice(0, 80),
+      label: `${measure.shortName}, ${shortDate(measure.last.on, facts.today)}`.slice(0, 80),
     }),
   );
 }

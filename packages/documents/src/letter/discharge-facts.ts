@@ -16,6 +16,8 @@ export interface NotedText {
 export interface MeasureFact {
   readonly key: string;
   readonly name: string;
+  /** For the margin: "Chair stand". */
+  readonly shortName: string;
   readonly first: { readonly score: string; readonly on: PlainDateText };
   readonly last: { readonly recordId: string; readonly score: string; readonly on: PlainDateText };
   readonly timesTaken: number;

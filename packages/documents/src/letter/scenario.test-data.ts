@@ -52,6 +52,7 @@ export const hipFacts: DischargeFacts = {
     {
       key: "pain",
       name: "Pain on walking",
+      shortName: "Pain",
       scale: "out of 10",
       first: { score: "6", on: "2026-10-06" },
       last: { recordId: id(5), score: "3", on: "2026-12-01" },
@@ -62,6 +63,7 @@ export const hipFacts: DischargeFacts = {
     {
       key: "chair-stand-30",
       name: "30-second chair stand",
+      shortName: "Chair stand",
       scale: "stands",
       first: { score: "13", on: "2026-12-01" },
       last: { recordId: id(6), score: "13", on: "2026-12-01" },

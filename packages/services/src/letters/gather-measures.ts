@@ -23,6 +23,8 @@ function factOf(measure: MeasureSeriesView, scale: ScaleSeriesView): MeasureFact
   return {
     key: measure.scales.length === 1 ? measure.measureKey : `${measure.measureKey}-${scale.scaleKey}`,
     name: nameOf(measure, scale),
+    shortName:
+      measure.scales.length === 1 ? measure.shortLabel : `${measure.shortLabel} ${scale.label.toLowerCase()}`,
     scale: scaleWords(scale),
     first: { score: first.shown, on: first.takenOn },
     last: { recordId: last.recordId, score: last.shown, on: last.takenOn },
