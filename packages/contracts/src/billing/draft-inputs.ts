@@ -74,6 +74,8 @@ export interface ToIssueView {
   readonly draftsTotalPence: Pence;
   readonly visits: readonly VisitToInvoiceView[];
   readonly visitsTotalPence: Pence;
+  /** The list holds the oldest visits only; more come once these are drafted. */
+  readonly areMoreVisits: boolean;
 }
 
 export interface DraftedView {

@@ -6,7 +6,7 @@ import { appointments, invoiceLines, invoices, patients, payers, sites } from "@
 import { and, asc, eq, inArray, sql } from "drizzle-orm";
 import type { Context } from "../context";
 import { verb } from "../verb";
-import { visitsToInvoice } from "./visits-to-invoice";
+import { mostVisits, visitsToInvoice } from "./visits-to-invoice";
 
 type Wish = { siteId?: string | undefined; patientId?: string | undefined };
 
@@ -26,6 +26,7 @@ export const listToIssue = verb("billing.draft", listDraftsInput, async (ctx, wi
       on: v.on,
       pricePence: v.price?.amountPence ?? null,
     })),
+    areMoreVisits: visits.length >= mostVisits,
     visitsTotalPence: sumPence(visits.map((v) => v.price?.amountPence ?? 0)),
   };
 });

@@ -31,6 +31,9 @@ export interface VisitToInvoice {
 /** How far back visits are looked for: a year-old visit is a question for a person, not for a list. */
 const daysBack = 180;
 
+/** The most visits that one list shows or one run drafts; the oldest come first, the rest come with the next. */
+export const mostVisits = 1000;
+
 /** The practice's price list in the shape that the rule takes. */
 export async function loadPrices(ctx: Context): Promise<Price[]> {
   const rows = await ctx.db.select().from(prices).where(eq(prices.practiceId, ctx.practiceId));
@@ -100,7 +103,8 @@ export async function visitsToInvoice(
         reach === "all" ? undefined : inArray(appointments.siteId, reach),
       ),
     )
-    .orderBy(asc(appointments.startsAt), asc(appointments.id), desc(patientPayers.createdAt));
+    .orderBy(asc(appointments.startsAt), asc(appointments.id), desc(patientPayers.createdAt))
+    .limit(mostVisits);
   const list = await loadPrices(ctx);
   const seen = new Set<string>();
   return rows.flatMap((row) => {

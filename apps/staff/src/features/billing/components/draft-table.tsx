@@ -83,7 +83,7 @@ export function DraftTable({ drafts, totalPence, today, chosenIds, onChoose }: D
                 {days(draft, today)}
               </td>
               <td className="soft wide">{draft.siteName}</td>
-              <td className="n" data-label="Total £">
+              <td className="n owedcol" data-label="Total £">
                 {figure(draft.totalPence)}
               </td>
             </tr>
@@ -96,7 +96,7 @@ export function DraftTable({ drafts, totalPence, today, chosenIds, onChoose }: D
               All {drafts.length} drafts
             </th>
             <td className="wide" />
-            <td className="n" data-label="Total £">
+            <td className="n owedcol" data-label="Total £">
               {figure(totalPence)}
             </td>
           </tr>

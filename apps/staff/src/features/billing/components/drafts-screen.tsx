@@ -21,7 +21,7 @@ interface DraftsScreenProps {
 
 /** From attended visits to drafts, from drafts to invoices. */
 export function DraftsScreen({ first, today, may }: DraftsScreenProps) {
-  const { drafts, draftsTotalPence, visits, visitsTotalPence } = useToIssue(first);
+  const { drafts, draftsTotalPence, visits, visitsTotalPence, areMoreVisits } = useToIssue(first);
   const [chosenIds, setChosenIds] = useState<readonly string[]>([]);
   const issue = useIssueMany();
   const chosen = drafts.filter((d) => chosenIds.includes(d.id));
@@ -78,7 +78,13 @@ export function DraftsScreen({ first, today, may }: DraftsScreenProps) {
           onChoose={may.issue ? setChosenIds : null}
         />
       )}
-      <VisitsToInvoice visits={visits} totalPence={visitsTotalPence} today={today} mayDraft={may.draft} />
+      <VisitsToInvoice
+        visits={visits}
+        totalPence={visitsTotalPence}
+        areMore={areMoreVisits}
+        today={today}
+        mayDraft={may.draft}
+      />
     </Page>
   );
 }

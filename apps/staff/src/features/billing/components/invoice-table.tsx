@@ -116,7 +116,7 @@ function InvoiceLine({ row, before, today, isAged }: InvoiceLineProps) {
       <td className="n soft mid" data-label="Paid">
         {row.paidPence === 0 ? "" : figure(row.paidPence)}
       </td>
-      <td className="n" data-label="Owed £">
+      <td className="n owedcol" data-label="Owed £">
         <b>{figure(row.owedPence)}</b>
       </td>
       <td className="agec wide">
@@ -150,7 +150,7 @@ function Sums({ label, sums }: { label: string; sums: InvoiceSumsView }) {
       <td className="n mid" data-label="Paid">
         {figure(sums.paidPence)}
       </td>
-      <td className="n" data-label="Owed £">
+      <td className="n owedcol" data-label="Owed £">
         {figure(sums.owedPence)}
       </td>
       <td className="wide" />

@@ -12,6 +12,7 @@ import { useDraftVisits } from "../hooks/use-to-issue";
 interface VisitsToInvoiceProps {
   visits: readonly VisitToInvoiceView[];
   totalPence: Pence;
+  areMore: boolean;
   today: string;
   mayDraft: boolean;
 }
@@ -19,7 +20,7 @@ interface VisitsToInvoiceProps {
 const mostShown = 40;
 
 /** Attended visits that stand on no invoice, oldest first; one press puts those with a price on drafts. */
-export function VisitsToInvoice({ visits, totalPence, today, mayDraft }: VisitsToInvoiceProps) {
+export function VisitsToInvoice({ visits, totalPence, areMore, today, mayDraft }: VisitsToInvoiceProps) {
   const draft = useDraftVisits();
   const unpriced = visits.filter((v) => v.pricePence === null).length;
   const priced = visits.length - unpriced;
@@ -29,7 +30,7 @@ export function VisitsToInvoice({ visits, totalPence, today, mayDraft }: VisitsT
         <SectionHead
           id="visits-title"
           title="Attended, on no draft yet"
-          aside={`${visits.length} visits, ${formatMoney(totalPence)}`}
+          aside={`${areMore ? "the oldest " : ""}${visits.length} visits, ${formatMoney(totalPence)}`}
           action={
             mayDraft &&
             priced > 0 && (
