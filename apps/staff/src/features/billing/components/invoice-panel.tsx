@@ -1,6 +1,7 @@
 "use client";
 import type { InvoiceView } from "@withy/contracts/billing";
 import { Button } from "@withy/ui/button";
+import dynamic from "next/dynamic";
 import { useEffect, useState } from "react";
 import { invoicePdfAddress } from "../api-client";
 import { useCardPayment } from "../hooks/use-card-payment";
@@ -8,7 +9,8 @@ import type { InvoiceRights } from "../invoice-rights";
 import { MoneyTaken } from "./money-taken";
 import { OpenCardPayment } from "./open-card-payment";
 import { PaymentForm } from "./payment-form";
-import { VoidDialog } from "./void-dialog";
+
+const VoidDialog = dynamic(() => import("./void-dialog").then((m) => m.VoidDialog));
 
 interface InvoicePanelProps {
   invoice: InvoiceView;

@@ -6,9 +6,11 @@ import { formatMoney } from "@withy/core/money";
 import { AlertLine } from "@withy/ui/alert-line";
 import { Button } from "@withy/ui/button";
 import { SectionHead } from "@withy/ui/section-head";
+import dynamic from "next/dynamic";
 import { useState } from "react";
 import { useRetryRefund } from "../hooks/use-refund-payment";
-import { RefundDialog } from "./refund-dialog";
+
+const RefundDialog = dynamic(() => import("./refund-dialog").then((m) => m.RefundDialog));
 
 /** What was taken and given back, each with its way back. */
 export function MoneyTaken({ invoice, mayRefund }: { invoice: InvoiceView; mayRefund: boolean }) {
