@@ -7,6 +7,7 @@ import { EmptyState } from "@withy/ui/empty-state";
 import { Line } from "@withy/ui/line";
 import { PageBody } from "@withy/ui/page";
 import { SectionHead } from "@withy/ui/section-head";
+import dynamic from "next/dynamic";
 import Link from "next/link";
 import { useState } from "react";
 import { useEpisode } from "../hooks/use-episode";
@@ -17,7 +18,8 @@ import { EpisodeFacts } from "./episode-facts";
 import { GoalsForm } from "./goals-form";
 import { MeasurePanel } from "./measure-panel";
 import { RecordTitle } from "./record-title";
-import { RedFlagsDialog } from "./red-flags-dialog";
+
+const RedFlagsDialog = dynamic(() => import("./red-flags-dialog").then((m) => m.RedFlagsDialog));
 
 export interface EpisodePageProps {
   episode: EpisodeView;

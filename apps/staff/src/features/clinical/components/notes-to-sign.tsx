@@ -3,13 +3,15 @@ import type { DayList, DayVisit, UnsignedItem } from "@withy/contracts/clinical"
 import { EmptyState } from "@withy/ui/empty-state";
 import { Page, PageBody, PageTitle } from "@withy/ui/page";
 import { SectionHead } from "@withy/ui/section-head";
+import dynamic from "next/dynamic";
 import { useState } from "react";
 import { useDayList } from "../hooks/use-day-list";
 import { useUnsignedNotes } from "../hooks/use-unsigned-notes";
 import { weekdayAt } from "../site-time";
-import { StartNote } from "./start-note";
 import { UnsignedLine } from "./unsigned-line";
 import { VisitLine } from "./visit-line";
+
+const StartNote = dynamic(() => import("./start-note").then((m) => m.StartNote));
 
 export interface NotesToSignProps {
   day: DayList;

@@ -1,12 +1,14 @@
 "use client";
 import { noteKindLabels } from "@withy/clinical/notes/headings";
+import dynamic from "next/dynamic";
 import { useState } from "react";
-import { AddendumDialog } from "./addendum-dialog";
 import { LastNote } from "./last-note";
 import { MeasurePanel } from "./measure-panel";
 import { NoteBar } from "./note-bar";
 import type { NoteParts } from "./note-parts";
 import { SignedNote } from "./signed-note";
+
+const AddendumDialog = dynamic(() => import("./addendum-dialog").then((m) => m.AddendumDialog));
 
 /** A note that is read: signed, or someone else's draft. */
 export function ReadNote({ note, measures, day, visitDay, visitWords }: NoteParts) {

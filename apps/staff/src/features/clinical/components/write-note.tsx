@@ -1,20 +1,22 @@
 "use client";
 import { emptyHeadings } from "@withy/clinical/notes/check-note";
 import { noteKindLabels } from "@withy/clinical/notes/headings";
+import dynamic from "next/dynamic";
 import { useState } from "react";
 import { useShortcut } from "@/components/shortcuts/shortcut-provider";
 import { useNoteChange } from "../hooks/use-note";
 import { useNoteDraft } from "../hooks/use-note-draft";
 import { useSignNote } from "../hooks/use-sign-note";
-import { ClashDialog } from "./clash-dialog";
 import { LastNote } from "./last-note";
 import { MeasurePanel } from "./measure-panel";
 import { NoteBar } from "./note-bar";
 import { NoteEditor } from "./note-editor";
 import type { NoteParts } from "./note-parts";
-import { RedFlagsDialog } from "./red-flags-dialog";
 import { SavedMark } from "./saved-mark";
-import { SignDialog } from "./sign-dialog";
+
+const ClashDialog = dynamic(() => import("./clash-dialog").then((m) => m.ClashDialog));
+const RedFlagsDialog = dynamic(() => import("./red-flags-dialog").then((m) => m.RedFlagsDialog));
+const SignDialog = dynamic(() => import("./sign-dialog").then((m) => m.SignDialog));
 
 type Open = "sign" | "flags" | "clash" | null;
 
