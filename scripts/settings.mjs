@@ -82,7 +82,10 @@ export function readSecrets(dataDir) {
   return secrets;
 }
 
-/** The one reading of the environment and of .env; what is set in the environment wins. */
+/**
+ * The one reading of the environment and of .env; what is set in the environment wins.
+ * @param {Record<string, string | undefined>} environment
+ */
 export function readSettings(environment = process.env, envFile = join(root, ".env")) {
   const fromFile = existsSync(envFile) ? parseEnvFile(readFileSync(envFile, "utf8")) : {};
   const env = { ...fromFile, ...environment };
