@@ -5,13 +5,12 @@ import { idField, pageFields } from "./fields";
 export const accountTemplates = ["password-reset", "staff-invitation"] as const;
 export type AccountTemplate = (typeof accountTemplates)[number];
 
-export type MessageTemplate = AppointmentTemplate | AccountTemplate | "letter-waiting" | "invoice-sent";
+export type MessageTemplate = AppointmentTemplate | AccountTemplate | "letter-waiting";
 
 export const messageTemplates: readonly MessageTemplate[] = [
   ...appointmentTemplates,
   ...accountTemplates,
   "letter-waiting",
-  "invoice-sent",
 ];
 
 export const messageTemplateWords: Record<MessageTemplate, string> = {
@@ -21,7 +20,6 @@ export const messageTemplateWords: Record<MessageTemplate, string> = {
   "password-reset": "New password",
   "staff-invitation": "Invitation",
   "letter-waiting": "Letter",
-  "invoice-sent": "Invoice",
 };
 
 /** A path of our own app; the worker puts the app's address before it. It carries a secret: cleared once sent. */

@@ -71,11 +71,6 @@ export class Pdf {
     this.current.add(draw);
   }
 
-  /** The open element, for an annotation that must name it. */
-  get structParent(): PDFKit.PDFStructureElement {
-    return this.current;
-  }
-
   /** Starts a new page unless this much room is left. */
   need(points: number): void {
     if (this.y + points > this.floor) this.newPage();

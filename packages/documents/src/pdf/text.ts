@@ -1,4 +1,4 @@
-import { ink, type TextStyle, textStyles } from "./page-style";
+import { type TextStyle, textStyles } from "./page-style";
 import type { Pdf } from "./pdf";
 import type { Align, Text } from "./pen";
 
@@ -43,31 +43,6 @@ export function list(
       pdf.space(2);
     }
   });
-}
-
-/** A line that can be pressed on a screen; the address is also what a screen reader says. */
-export function link(pdf: Pdf, text: string, url: string, style: TextStyle = textStyles.body): void {
-  const lined = { ...style, color: ink.oxide };
-  pdf.element("P", () =>
-    pdf.element("Link", () => {
-      for (const line of pdf.pen.lines(text, lined, pdf.width)) {
-        pdf.need(lined.leading);
-        const { x, y } = pdf;
-        pdf.mark(() => pdf.pen.line(line, lined, x, y, pdf.width));
-        const annotation = { Contents: new String(text), structParent: pdf.structParent };
-        pdf.doc.link(
-          x,
-          y,
-          line.width,
-          lined.leading,
-          url,
-          annotation as unknown as PDFKit.Mixins.AnnotationOption,
-        );
-        pdf.y += lined.leading;
-      }
-    }),
-  );
-  pdf.space(3);
 }
 
 /** A drawing with the words that stand for it. `draw` is given the top left corner. */

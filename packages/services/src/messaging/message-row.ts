@@ -11,7 +11,7 @@ const templateOf = (text: string): MessageTemplate | null =>
   messageTemplates.find((known) => known === text) ?? null;
 
 /** Their payload stays after sending, since there is no secret in it. */
-const repeatable = new Set<string>([...appointmentTemplates, "invoice-sent"]);
+const repeatable = new Set<string>(appointmentTemplates);
 
 /** Whether it may go once more: one that failed, or one that arrived and was lost by its reader. */
 export function canSendAgain(row: Pick<OutboxRow, "state" | "template">): boolean {

@@ -73,7 +73,7 @@ export function MessagesScreen({ state, first, counts, zone }: MessagesScreenPro
           onPageChange={(index) => router.push(`/messages?state=${state}&page=${index + 1}`)}
           empty={
             <EmptyState title="No messages here">
-              Confirmations, links to letters and invoices appear here as they are written.
+              Confirmations of appointments and links to letters appear here as they are written.
             </EmptyState>
           }
         />
