@@ -8,6 +8,7 @@ import {
   climb,
   ladderFrom,
   moveItem,
+  putBack,
   removeItem,
   setEquipmentMissing,
 } from "./draft-changes";
@@ -27,6 +28,16 @@ describe("building a programme", () => {
     expect(programme.items[1]?.id).toBe(firstId);
   });
 
+  it("never comes between the left and the right of one movement", () => {
+    const pair = build("step-up");
+    const left = pair.items[0]?.id ?? "";
+    expect(keysOf(addExercise(pair, "bridge", left, id).programme)).toEqual([
+      "step-up left",
+      "step-up right",
+      "bridge both",
+    ]);
+  });
+
   it("moves and removes lines, and ignores places that are not there", () => {
     const three = build("bridge", "clam");
     const [a, b, c] = three.items.map((item) => item.id);
@@ -34,7 +45,12 @@ describe("building a programme", () => {
     expect(moveItem(three, c ?? "", 0).items.map((item) => item.id)).toEqual([c, a, b]);
     expect(moveItem(three, a ?? "", 3)).toBe(three);
     expect(moveItem(three, "none", 0)).toBe(three);
-    expect(keysOf(removeItem(three, a ?? ""))).toEqual(["clam left", "clam right"]);
+    const without = removeItem(three, a ?? "");
+    expect(keysOf(without)).toEqual(["clam left", "clam right"]);
+    const [bridge] = three.items;
+    if (!bridge) throw new Error("the bridge is the first line");
+    expect(keysOf(putBack({ ...without, rounds: 5 }, bridge, 0))).toEqual(keysOf(three));
+    expect(putBack(three, bridge, 0)).toBe(three);
   });
 
   it("climbs the ladder, says why it ends, and passes over what is not at home", () => {

@@ -21,6 +21,12 @@ export function changeAll(
   return { ...programme, items: programme.items.map((item) => ({ ...item, ...change })) };
 }
 
+/** Whether the line is a left side whose right side follows. */
+function isPair(items: readonly ProgrammeItem[], at: number): boolean {
+  const [left, right] = [items[at], items[at + 1]];
+  return left?.side === "left" && right?.side === "right" && left.exercise === right.exercise;
+}
+
 /** New lines stand after the chosen one, or at the end; what is not at home is swapped at once. */
 export function addExercise(
   programme: Programme,
@@ -30,7 +36,7 @@ export function addExercise(
 ): { programme: Programme; firstId: string | null } {
   const lines = newItems(exerciseKey, programme.mode, newId);
   const at = programme.items.findIndex((item) => item.id === afterId);
-  const place = at < 0 ? programme.items.length : at + 1;
+  const place = at < 0 ? programme.items.length : at + (isPair(programme.items, at) ? 2 : 1);
   const items = [...programme.items.slice(0, place), ...lines, ...programme.items.slice(place)];
   return {
     programme: swapForEquipment({ ...programme, items }, programme.equipmentMissing),
@@ -40,6 +46,12 @@ export function addExercise(
 
 export function removeItem(programme: Programme, id: string): Programme {
   return { ...programme, items: programme.items.filter((item) => item.id !== id) };
+}
+
+/** Takes a removal back, without touching what was changed since. */
+export function putBack(programme: Programme, item: ProgrammeItem, index: number): Programme {
+  if (programme.items.some((other) => other.id === item.id)) return programme;
+  return { ...programme, items: programme.items.toSpliced(index, 0, item) };
 }
 
 /** Moves a line to the place of another. */

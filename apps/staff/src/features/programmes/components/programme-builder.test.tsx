@@ -156,7 +156,7 @@ describe("the lines", () => {
     press(/^Bridge/);
     press(/^Remove\s*Bridge/);
     expect(names()).not.toContain("Bridge");
-    fireEvent.click(await screen.findByRole("button", { name: "Undo", hidden: true }));
+    fireEvent.click(await screen.findByRole("button", { name: /^Undo/ }));
     await waitFor(() => expect(names()).toContain("Bridge"));
   });
 

@@ -1,10 +1,10 @@
 import { findExercise } from "@withy/clinical/exercises/library";
-import type { Programme } from "@withy/clinical/programmes/programme";
 import type { ProgrammeView } from "@withy/contracts/programmes";
+import { newId } from "@withy/core/ids";
 import { timeOf } from "@withy/core/zoned-time";
 import { useChanges } from "@withy/ui/recent-changes";
 import { useState } from "react";
-import { addExercise, changeItem, climb, moveItem, removeItem } from "../draft-changes";
+import { addExercise, changeItem, climb, moveItem, putBack, removeItem } from "../draft-changes";
 import { useProgrammeDraft } from "./use-programme-draft";
 
 /** The draft with the chosen line and everything that can be done to a line. */
@@ -32,20 +32,20 @@ export function useBuilder(first: ProgrammeView) {
       focusLine(id);
     },
     remove: (id: string) => {
-      const before: Programme = programme;
-      const index = before.items.findIndex((item) => item.id === id);
-      const name = findExercise(before.items[index]?.exercise ?? "")?.name ?? "A line";
+      const { items } = programme;
+      const index = items.findIndex((item) => item.id === id);
+      const item = items[index];
+      if (!item) return;
+      const name = findExercise(item.exercise)?.name ?? "A line";
       kept.change((p) => removeItem(p, id));
       choose(null);
-      focusLine(before.items[index + 1]?.id ?? before.items[index - 1]?.id ?? null);
-      const undo = async () => kept.change(() => before);
+      focusLine(items[index + 1]?.id ?? items[index - 1]?.id ?? null);
+      const undo = async () => kept.change((p) => putBack(p, item, index));
       announce({ at: timeOf(new Date(), first.zone), said: `${name} removed from the programme`, undo });
     },
   };
   const add = (exerciseKey: string) => {
-    const { programme: next, firstId } = addExercise(programme, exerciseKey, chosenId, () =>
-      crypto.randomUUID(),
-    );
+    const { programme: next, firstId } = addExercise(programme, exerciseKey, chosenId, newId);
     kept.change(() => next);
     choose(firstId);
     focusLine(firstId);

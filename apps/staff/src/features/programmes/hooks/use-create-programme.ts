@@ -1,5 +1,6 @@
 import { useMutation, useQueryClient } from "@tanstack/react-query";
 import type { CreateProgrammeInput } from "@withy/contracts/programmes";
+import { newId } from "@withy/core/ids";
 import { useRef } from "react";
 import { createProgramme } from "../api-client";
 import { programmeKeys } from "../query-keys";
@@ -10,7 +11,7 @@ export function useCreateProgramme(patientId: string) {
   const key = useRef<string | null>(null);
   return useMutation({
     mutationFn: (input: CreateProgrammeInput) => {
-      key.current ??= crypto.randomUUID();
+      key.current ??= newId();
       return createProgramme(input, key.current);
     },
     onSuccess: () => {

@@ -1,4 +1,5 @@
 import { useMutation } from "@tanstack/react-query";
+import { newId } from "@withy/core/ids";
 import { useRef } from "react";
 import { issueProgramme } from "../api-client";
 
@@ -6,7 +7,7 @@ export function useIssueProgramme() {
   const key = useRef<string | null>(null);
   return useMutation({
     mutationFn: (input: { programmeId: string; version: number }) => {
-      key.current ??= crypto.randomUUID();
+      key.current ??= newId();
       return issueProgramme(input, key.current);
     },
     onSettled: () => {
