@@ -33,7 +33,7 @@ const style = `
 `;
 
 function page(title: string, body: string): string {
-  return `<!doctype html><html lang="en-GB"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><title>${escaped(title)}: Withy mailbox</title><style>${style}</style></head><body><main>${body}</main></body></html>`;
+  return `<!doctype html><html lang="en-GB"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><link rel="icon" href="data:,"><title>${escaped(title)}: Withy mailbox</title><style>${style}</style></head><body><main>${body}</main></body></html>`;
 }
 
 const clock = new Intl.DateTimeFormat("en-GB", {
