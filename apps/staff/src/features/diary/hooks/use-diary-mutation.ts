@@ -16,17 +16,18 @@ export function useDiaryMutation<Input>(
 ) {
   const client = useQueryClient();
   const { announce } = useChanges();
-  const settle = async (view: AppointmentView) => {
+  // Reading everything again is not waited for: the answer itself already stands in its place.
+  const settle = (view: AppointmentView) => {
     client.setQueryData(diaryKeys.appointment(view.id), view);
-    await client.invalidateQueries({ queryKey: diaryKeys.all });
+    void client.invalidateQueries({ queryKey: diaryKeys.all });
   };
   return useMutation({
     mutationFn: run,
-    onSuccess: async (view, input) => {
+    onSuccess: (view, input) => {
       const { said, undo } = describe(view, input);
       const at = timeOf(new Date(), view.site.zone);
       announce({ at, said, ...(undo ? { undo: () => undo().then(settle) } : {}) });
-      await settle(view);
+      settle(view);
     },
   });
 }

@@ -9,7 +9,9 @@ import { todayKeys } from "../query-keys";
 export function useMarkArrival() {
   const client = useQueryClient();
   const { announce } = useChanges();
-  const refresh = () => client.invalidateQueries({ queryKey: todayKeys.all });
+  const refresh = () => {
+    void client.invalidateQueries({ queryKey: todayKeys.all });
+  };
   return useMutation({
     mutationFn: markArrival,
     onSuccess: (view, input) => {
