@@ -49,10 +49,10 @@ beforeAll(async () => {
     ...stamp(),
     episodeId: episode.id,
     patientId,
-    measureKey: "nprs",
-    ruleVersion: "1",
-    answers: {} as never,
-    scores: {},
+    measureKey: "pain-rating",
+    ruleVersion: "2026-12",
+    answers: { items: [5] },
+    scores: { pain: 5 },
     takenOn: "2026-11-10",
     enteredBy: practice.staff.therapist.id,
     enteredAt: at("2026-11-10T10:40:00Z"),
@@ -149,7 +149,9 @@ test("one kind at a time", async () => {
   const money = await getTimeline(ctx, { patientId, kind: "money" });
   expect(money.entries.map((e) => e.kind)).toEqual(["payment", "invoice"]);
   const measures = await getTimeline(ctx, { patientId, kind: "measures" });
-  expect(measures.entries).toMatchObject([{ measureKey: "nprs", day: "2026-11-10", time: "10:40" }]);
+  expect(measures.entries).toMatchObject([
+    { measureKey: "pain-rating", result: "5 points", day: "2026-11-10", time: "10:40" },
+  ]);
 });
 
 test.each([1, 2, 3, 7])("pages of %i meet without a gap and without a repeat", async (size) => {

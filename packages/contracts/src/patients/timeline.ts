@@ -31,6 +31,7 @@ export interface VisitEntry extends Entry {
   readonly serviceName: string;
   readonly minutes: number;
   readonly therapistName: string;
+  readonly siteId: string;
   readonly siteName: string;
   readonly cancelledBy: "patient" | "clinic" | null;
   readonly isLateCancellation: boolean;
@@ -48,6 +49,8 @@ export interface MeasureEntry extends Entry {
   readonly kind: "measure";
   readonly measureKey: string;
   readonly measureName: string;
+  /** "Pain 62.5, stiffness 50.0", or nothing where no score could be made. */
+  readonly result: string;
   readonly takenOn: string;
   readonly episodeId: string;
 }

@@ -29,7 +29,9 @@ export function entryWords(entry: TimelineEntry, patientId: string): EntryWords 
     case "measure":
       return {
         title: entry.measureName,
-        detail: entry.takenOn === entry.day ? "" : `Taken ${dayAndYear(entry.takenOn)}`,
+        detail: [entry.result, entry.takenOn === entry.day ? "" : `taken ${dayAndYear(entry.takenOn)}`]
+          .filter(Boolean)
+          .join(", "),
         href: `/patients/${patientId}/measures`,
       };
     case "letter":
@@ -63,7 +65,7 @@ function visitWords(entry: VisitEntry): EntryWords {
   return {
     title,
     detail: `${entry.therapistName}, ${entry.siteName}`,
-    href: `/diary?day=${entry.day}&open=${entry.id}`,
+    href: `/diary?day=${entry.day}&site=${entry.siteId}&at=${entry.id}`,
   };
 }
 

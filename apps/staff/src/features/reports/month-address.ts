@@ -15,3 +15,10 @@ export function usualMonth(today: string): string {
   const month = today.slice(0, 7);
   return Number(today.slice(8)) <= 7 ? monthOn(month, -1) : month;
 }
+
+const months = ["Jan", "Feb", "Mar", "Apr", "May", "Jun", "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"];
+
+/** "Nov". */
+export function shortMonth(month: string): string {
+  return months[Number(month.slice(5)) - 1] ?? "";
+}

@@ -1,4 +1,6 @@
 import { findMeasure } from "@withy/clinical/measures/catalogue";
+import { scalesOf } from "@withy/clinical/measures/measure";
+import { formatScore } from "@withy/clinical/measures/rounding";
 import type { LetterEntry, MeasureEntry, NoteEntry } from "@withy/contracts/patients";
 import { can, sitesWith } from "@withy/core/access/can";
 import { dayOf, timeOf } from "@withy/core/zoned-time";
@@ -79,9 +81,25 @@ export async function measureEntries(
     ...moment(ctx, row.enteredAt),
     measureKey: row.measureKey,
     measureName: findMeasure(row.measureKey)?.label ?? row.measureKey,
+    result: resultWords(row.measureKey, row.scores),
     takenOn: row.takenOn,
     episodeId: row.episodeId,
   }));
+}
+
+/** The scores as shown, each after its scale's name where there are several. */
+function resultWords(measureKey: string, scores: Readonly<Record<string, number | null>>): string {
+  const measure = findMeasure(measureKey);
+  if (!measure) return "";
+  const scales = scalesOf(measure);
+  return scales
+    .flatMap(({ key, label, unit, decimals }) => {
+      const value = scores[key];
+      if (value == null) return [];
+      const shown = formatScore(value, decimals);
+      return scales.length > 1 ? [`${label} ${shown}`] : [`${shown} ${unit}`];
+    })
+    .join(", ");
 }
 
 /** Letters, at the moment they were signed, or begun where they are not. */

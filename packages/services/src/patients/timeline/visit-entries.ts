@@ -51,6 +51,7 @@ export async function visitEntries(ctx: Context, { patientId, before, limit }: S
     serviceName: row.serviceName,
     minutes: minutesBetween(visit.startsAt, visit.endsAt),
     therapistName: `${row.givenName} ${row.familyName}`,
+    siteId: visit.siteId,
     siteName: row.siteName,
     cancelledBy: visit.cancelledBy,
     isLateCancellation: visit.isLateCancellation,

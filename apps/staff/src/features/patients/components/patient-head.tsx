@@ -22,7 +22,7 @@ export function PatientHead({ patient, mayEdit, mayBook }: Props) {
   const router = useRouter();
   const path = usePathname();
   const here = `/patients/${patient.id}`;
-  const bookAt = `/diary/find?patientId=${patient.id}`;
+  const bookAt = `/diary/find?patient=${patient.id}`;
   useShortcut("edit", () => router.push(`${here}/edit`), mayEdit);
   useShortcut("book", () => router.push(bookAt), mayBook);
   return (

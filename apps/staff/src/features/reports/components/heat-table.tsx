@@ -27,7 +27,8 @@ export function HeatTable({ heat, where }: { heat: HeatView; where: string }) {
         <p className="soft">No hours were on offer, so there is no data.</p>
       ) : (
         <>
-          <div className="heatscroll">
+          {/* biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls sideways must be reached by keys */}
+          <section className="heatscroll" aria-labelledby="heat-title" tabIndex={0}>
             <table className="heat">
               <caption className="vh">Percent booked by weekday and hour</caption>
               <thead>
@@ -53,7 +54,7 @@ export function HeatTable({ heat, where }: { heat: HeatView; where: string }) {
                 ))}
               </tbody>
             </table>
-          </div>
+          </section>
           <p className="heatkey soft" aria-hidden="true">
             {steps.map((step) => (
               <span key={step.className}>

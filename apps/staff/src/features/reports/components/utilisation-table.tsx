@@ -2,6 +2,7 @@ import type { MonthView, UtilisationRow } from "@withy/contracts/reports";
 import { SectionHead } from "@withy/ui/section-head";
 import type { CSSProperties } from "react";
 import { hoursWords, noData, pointsWords } from "../figure-words";
+import { monthOn, shortMonth } from "../month-address";
 import { type FigureAsked, Opens } from "./figure-sheet";
 
 /** How full: by therapist, by site, and all, against the target line. */
@@ -41,7 +42,7 @@ export function UtilisationTable({ month }: { month: MonthView }) {
               hours
             </th>
             <th scope="col" className="n">
-              on before
+              {beforeWords(month.month)}
             </th>
           </tr>
         </thead>
@@ -87,6 +88,11 @@ function Row({ row, asked }: { row: UtilisationRow; asked: Omit<FigureAsked, "fi
       <td className="n soft">{pointsWords(row.booked, row.bookedBefore)}</td>
     </tr>
   );
+}
+
+/** "on Oct": which month the last column compares with. */
+function beforeWords(month: string): string {
+  return `on ${shortMonth(monthOn(month, -1))}`;
 }
 
 /** Overtime may take a share past the whole; the bar stops at its end, the figure does not. */

@@ -1,7 +1,7 @@
 import type { PatientView, TimelineKind } from "@withy/contracts/patients";
 import { can } from "@withy/core/access/can";
 import type { Permission } from "@withy/core/access/permissions";
-import { plainDateWords } from "@withy/core/date-words";
+import { plainDateWords, shortDate } from "@withy/core/date-words";
 import { dayOf } from "@withy/core/zoned-time";
 import { getTimeline } from "@withy/services/patients";
 import { PatientFacts } from "@/features/patients/components/patient-facts";
@@ -25,7 +25,7 @@ export default async function PatientPage({ params }: PageProps<"/patients/[pati
   const patient = await openPatient(patientId);
   const first = await orNotFound(getTimeline(ctx, { patientId }));
   const today = dayOf(ctx.clock.now(), ctx.zone);
-  const { title, aside } = headWords(patient);
+  const { title, aside } = headWords(patient, today);
   return (
     <div className="pcols">
       <Timeline
@@ -41,11 +41,11 @@ export default async function PatientPage({ params }: PageProps<"/patients/[pati
   );
 }
 
-function headWords({ clinical, registeredOn }: PatientView) {
+function headWords({ clinical, registeredOn }: PatientView, today: string) {
   const episode = clinical?.openEpisode;
   return episode
     ? {
-        title: `${episode.problem}, since ${plainDateWords(episode.openedOn)}`,
+        title: `${episode.problem}, since ${shortDate(episode.openedOn, today)}`,
         aside: `open episode, ${episode.therapistName}`,
       }
     : { title: "Timeline", aside: `registered ${plainDateWords(registeredOn)}` };
