@@ -45,7 +45,8 @@ export const moveAppointmentInput = z.strictObject({
   /** Absent: as it is now. With another site a room there is chosen. */
   siteId: idField.optional(),
   therapistId: idField.optional(),
-  roomId: idField.optional(),
+  /** Null: any free room of the service's kind. */
+  roomId: idField.nullable().optional(),
   durationMinutes: z.int("Enter a length in minutes.").min(5).max(480).optional(),
   overrideReason,
 });

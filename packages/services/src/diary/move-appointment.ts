@@ -29,7 +29,8 @@ function planMove(ctx: Context, before: AppointmentRow, input: Input): Promise<V
   const siteId = input.siteId ?? before.siteId;
   if (siteId !== before.siteId) requireReach(ctx, "diary.book", siteId, "site");
   const { serviceId, patientId, cleanDownMinutes } = before;
-  const roomId = input.roomId ?? (siteId === before.siteId ? before.roomId : null);
+  const sameRoom = siteId === before.siteId ? before.roomId : null;
+  const roomId = input.roomId === undefined ? sameRoom : input.roomId;
   const therapistId = input.therapistId ?? before.therapistId;
   const durationMinutes = input.durationMinutes ?? minutesBetween(before.startsAt, before.endsAt);
   const ids = { siteId, therapistId, serviceId, roomId, patientId, episodeId: null };
