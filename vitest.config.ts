@@ -19,7 +19,7 @@ export default defineConfig({
             "tests/scripts/**/*.test.ts",
           ],
           exclude: ["packages/ui/**", "**/node_modules/**", "tests/architecture/database/**"],
-          testTimeout: 20_000,
+          testTimeout: 60_000,
         },
       },
       {
@@ -28,7 +28,9 @@ export default defineConfig({
           name: "ui-jsdom",
           environment: "jsdom",
           include: ["packages/ui/src/**/*.test.{ts,tsx}", "apps/staff/src/**/*.test.{ts,tsx}"],
-          testTimeout: 20_000,
+          setupFiles: ["packages/ui/src/testing/patient-screens.ts"],
+          testTimeout: 60_000,
+          hookTimeout: 60_000,
         },
       },
       {

@@ -1,5 +1,5 @@
 import { QueryClient, QueryClientProvider } from "@tanstack/react-query";
-import { cleanup, configure, fireEvent, render, screen, waitFor, within } from "@testing-library/react";
+import { cleanup, fireEvent, render, screen, waitFor, within } from "@testing-library/react";
 import { emptyProgramme, newItems } from "@withy/clinical/programmes/new-item";
 import type { ProgrammeView } from "@withy/contracts/programmes";
 import { ChangesProvider } from "@withy/ui/recent-changes";
@@ -10,7 +10,6 @@ import { ProgrammeBuilder } from "./programme-builder";
 vi.mock("next/navigation", () => ({ useRouter: () => ({ push: vi.fn() }), usePathname: () => "/exercises" }));
 
 // The dialogs are fetched when they are first opened.
-configure({ asyncUtilTimeout: 10_000 });
 
 let line = 0;
 const items = (...keys: string[]) => keys.flatMap((key) => newItems(key, "timed", () => `line-${++line}`));
