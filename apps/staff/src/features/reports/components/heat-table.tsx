@@ -28,7 +28,7 @@ export function HeatTable({ heat, where }: { heat: HeatView; where: string }) {
       ) : (
         <>
           {/* biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls sideways must be reached by keys */}
-          <section className="heatscroll" aria-labelledby="heat-title" tabIndex={0}>
+          <section className="heatscroll" aria-label="Hours of the week" tabIndex={0}>
             <table className="heat">
               <caption className="vh">Percent booked by weekday and hour</caption>
               <thead>
