@@ -9,6 +9,9 @@ import { readDayAddress } from "@/features/diary/day-address";
 import { queryOf, type SearchParams } from "@/features/diary/search-params";
 import { orNotFound, requireContext } from "@/server/context";
 import "@/features/diary/diary.css";
+import "@/features/diary/day-grid.css";
+import "@/features/diary/day-cells.css";
+import "@/features/diary/day-sheet.css";
 import "@/features/diary/diary-narrow.css";
 
 export async function generateMetadata({ searchParams }: { searchParams: SearchParams }): Promise<Metadata> {

@@ -8,6 +8,7 @@ import { readWishes } from "@/features/diary/find-wishes";
 import { queryOf, type SearchParams } from "@/features/diary/search-params";
 import { orNotFound, requireContext } from "@/server/context";
 import "@/features/diary/diary.css";
+import "@/features/diary/found-day.css";
 import "@/features/diary/find.css";
 
 export const metadata: Metadata = { title: "Find a time" };
