@@ -66,6 +66,7 @@ export function DayLanes({ day, now }: { day: DiaryDayView; now: number | null }
         <div key={minute} className="dayhour" style={{ top: top(minute, day) }} />
       ))}
       {now !== null && <div className="daynow" style={{ top: top(now, day) }} />}
+      {now !== null && <div className="daynow-over" style={{ top: top(now, day) }} />}
     </div>
   );
 }
