@@ -1,22 +1,17 @@
 "use client";
-import { Combobox } from "@withy/ui/combobox";
 import { Select } from "@withy/ui/select";
 import { TextArea, TextInput } from "@withy/ui/text-input";
-import { useState } from "react";
-import { Controller } from "react-hook-form";
+import dynamic from "next/dynamic";
 import { fieldProblem } from "@/api/form-problems";
-import { findGpPractices } from "../api-client";
-import type { SurgeryOption } from "../patient-form";
-import { AddSurgery } from "./add-surgery";
 import type { FieldsProps } from "./fields-props";
 
+const SurgeryField = dynamic(() => import("./surgery-field").then((m) => m.SurgeryField), {
+  ssr: false,
+  loading: () => <TextInput id="gpPractice" label="GP surgery" readOnly />,
+});
+
 export function CareFields({ form, error, choices }: FieldsProps) {
-  const { register, control } = form;
-  const [isAdding, setIsAdding] = useState(false);
-  const take = (surgery: SurgeryOption) => {
-    form.setValue("gpPractice", surgery);
-    setIsAdding(false);
-  };
+  const { register } = form;
   return (
     <>
       <TextInput
@@ -28,30 +23,7 @@ export function CareFields({ form, error, choices }: FieldsProps) {
         error={fieldProblem(error, "nhsNumber")}
         {...register("nhsNumber")}
       />
-      <Controller
-        control={control}
-        name="gpPractice"
-        render={({ field }) => (
-          <Combobox<SurgeryOption>
-            id="gpPractice"
-            label="GP surgery"
-            value={field.value}
-            onChange={field.onChange}
-            search={findGpPractices}
-            error={fieldProblem(error, "gpPracticeId")}
-            after={
-              <button
-                type="button"
-                className="btn addlink"
-                data-kind="plain"
-                onClick={() => setIsAdding(true)}
-              >
-                Add a surgery that is not in the list
-              </button>
-            }
-          />
-        )}
-      />
+      <SurgeryField form={form} error={error} />
       <TextInput
         id="gpName"
         label="GP's name"
@@ -87,7 +59,6 @@ export function CareFields({ form, error, choices }: FieldsProps) {
         error={fieldProblem(error, "nextOfKin")}
         {...register("nextOfKin")}
       />
-      <AddSurgery open={isAdding} onClose={() => setIsAdding(false)} onAdded={take} />
     </>
   );
 }

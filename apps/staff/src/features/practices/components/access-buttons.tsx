@@ -1,11 +1,15 @@
 "use client";
 import type { StaffRow } from "@withy/contracts/practices";
 import { Button } from "@withy/ui/button";
-import { Dialog } from "@withy/ui/dialog";
 import { useChanges } from "@withy/ui/recent-changes";
+import dynamic from "next/dynamic";
 import { useState } from "react";
 import { useDeactivate, useInviteAgain, useReactivate } from "../hooks/use-staff";
 import { momentWords } from "../moment-words";
+
+const EndAccessDialog = dynamic(() => import("./end-access-dialog").then((m) => m.EndAccessDialog), {
+  ssr: false,
+});
 
 interface Props {
   member: StaffRow;
@@ -70,17 +74,14 @@ export function AccessButtons({ member, isSelf, zone, onProblem }: Props) {
           End access<span className="vh"> of {member.name}</span>
         </Button>
       )}
-      <Dialog
-        open={isAsking}
-        onOpenChange={setIsAsking}
-        title={`End the access of ${member.name}`}
-        lead="They are signed out at once and cannot sign in. Their name stays under what they wrote."
-        actions={
-          <Button kind="stop" busy={end.isPending} onClick={endAccess}>
-            End access
-          </Button>
-        }
-      />
+      {isAsking && (
+        <EndAccessDialog
+          name={member.name}
+          isEnding={end.isPending}
+          onEnd={endAccess}
+          onClose={() => setIsAsking(false)}
+        />
+      )}
     </>
   );
 }

@@ -3,13 +3,15 @@ import type { StaffRow } from "@withy/contracts/practices";
 import { Button } from "@withy/ui/button";
 import { type DataColumn, DataTable } from "@withy/ui/data-table";
 import { SectionHead } from "@withy/ui/section-head";
+import dynamic from "next/dynamic";
 import { useState } from "react";
 import { useStaff } from "../hooks/use-staff";
 import { momentWords } from "../moment-words";
 import { heldWords } from "../role-words";
 import { AccessButtons } from "./access-buttons";
-import { InviteDialog } from "./invite-dialog";
-import { RolesDialog } from "./roles-dialog";
+
+const InviteDialog = dynamic(() => import("./invite-dialog").then((m) => m.InviteDialog), { ssr: false });
+const RolesDialog = dynamic(() => import("./roles-dialog").then((m) => m.RolesDialog), { ssr: false });
 
 interface Props {
   first: StaffRow[];

@@ -3,7 +3,8 @@ import { SectionHead } from "@withy/ui/section-head";
 import type { CSSProperties } from "react";
 import { hoursWords, noData, pointsWords } from "../figure-words";
 import { monthOn, shortMonth } from "../month-address";
-import { type FigureAsked, Opens } from "./figure-sheet";
+import type { FigureAsked } from "./figure-asked";
+import { Opens } from "./figure-sheet";
 
 /** How full: by therapist, by site, and all, against the target line. */
 export function UtilisationTable({ month }: { month: MonthView }) {
