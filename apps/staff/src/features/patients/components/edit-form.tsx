@@ -8,6 +8,7 @@ import { useRouter } from "next/navigation";
 import { useState } from "react";
 import { useForm } from "react-hook-form";
 import { ApiError } from "@/api/request";
+import { useAwake } from "@/components/use-awake";
 import { useEditPatient } from "../hooks/use-save-patient";
 import { formFrom, inputFrom } from "../patient-form";
 import type { PatientChoices } from "./fields-props";
@@ -21,6 +22,7 @@ export function EditForm({ patient, choices }: { patient: PatientView; choices: 
   const form = useForm({ defaultValues: formFrom(patient) });
   const [version, setVersion] = useState(patient.version);
   const edit = useEditPatient(patient.id);
+  const isAwake = useAwake();
   const theirs = theirVersion(edit.error);
   const save = (options: { isSomeoneElse?: boolean; over?: number } = {}) =>
     form.handleSubmit((typed) =>
@@ -77,7 +79,7 @@ export function EditForm({ patient, choices }: { patient: PatientView; choices: 
       )}
       <PatientFields form={form} error={edit.error} choices={choices} />
       <Buttons>
-        <Button kind="primary" type="submit" busy={edit.isPending}>
+        <Button kind="primary" type="submit" disabled={!isAwake} busy={edit.isPending}>
           Save details
         </Button>
         <ButtonLink href={`/patients/${patient.id}`} as={Link}>

@@ -5,6 +5,7 @@ import { useChanges } from "@withy/ui/recent-changes";
 import Link from "next/link";
 import { useRouter } from "next/navigation";
 import { useForm } from "react-hook-form";
+import { useAwake } from "@/components/use-awake";
 import { useRegisterPatient } from "../hooks/use-save-patient";
 import { emptyForm, inputFrom } from "../patient-form";
 import type { PatientChoices } from "./fields-props";
@@ -23,6 +24,7 @@ export function RegisterForm({ choices, deskSiteId, name }: Props) {
   const { announce } = useChanges();
   const form = useForm({ defaultValues: { ...emptyForm(deskSiteId), ...name } });
   const register = useRegisterPatient();
+  const isAwake = useAwake();
   const save = (isSomeoneElse: boolean) =>
     form.handleSubmit((typed) =>
       register.mutate(
@@ -52,7 +54,7 @@ export function RegisterForm({ choices, deskSiteId, name }: Props) {
       />
       <PatientFields form={form} error={register.error} choices={choices} />
       <Buttons>
-        <Button kind="primary" type="submit" busy={register.isPending}>
+        <Button kind="primary" type="submit" disabled={!isAwake} busy={register.isPending}>
           Register patient
         </Button>
         <ButtonLink href="/patients" as={Link}>

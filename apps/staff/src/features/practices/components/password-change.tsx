@@ -7,6 +7,7 @@ import { TextInput } from "@withy/ui/text-input";
 import { useState } from "react";
 import { useForm } from "react-hook-form";
 import { fieldProblem, problemItems } from "@/api/form-problems";
+import { useAwake } from "@/components/use-awake";
 import { useChangePassword } from "../hooks/use-change-password";
 import { momentWords } from "../moment-words";
 
@@ -18,6 +19,7 @@ export function PasswordChange({ zone }: { zone: string }) {
   const { register, handleSubmit, reset } = useForm({ defaultValues: empty });
   const [differs, setDiffers] = useState(false);
   const change = useChangePassword();
+  const isAwake = useAwake();
   const save = handleSubmit(({ currentPassword, password, again }) => {
     setDiffers(password !== again);
     if (password !== again) return;
@@ -69,7 +71,7 @@ export function PasswordChange({ zone }: { zone: string }) {
           {...register("again")}
         />
         <Buttons>
-          <Button kind="primary" type="submit" busy={change.isPending}>
+          <Button kind="primary" type="submit" disabled={!isAwake} busy={change.isPending}>
             Change password
           </Button>
         </Buttons>
