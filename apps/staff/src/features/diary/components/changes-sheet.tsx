@@ -34,7 +34,7 @@ export function ChangesSheet({ changes, canUndo, onClose }: ChangesSheetProps) {
           {problemItems(undo.error)[0]?.message}
         </AlertLine>
       )}
-      {changes.length === 0 && <p className="soft">Nothing was changed here today.</p>}
+      {changes.length === 0 && <p className="soft">Nothing was changed here yet.</p>}
       <ol className="recent">
         {changes.map((change) => (
           <li key={change.id}>

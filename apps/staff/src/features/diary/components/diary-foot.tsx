@@ -9,13 +9,15 @@ const ChangesSheet = dynamic(() => import("./changes-sheet").then((m) => m.Chang
 /** The strip at the foot: what was last done at these sites, and the list that it can be undone from. */
 export function DiaryFoot({ siteIds, canUndo }: { siteIds: readonly string[]; canUndo: boolean }) {
   const [isOpen, setIsOpen] = useState(false);
-  const changes = useSiteChanges(siteIds).data ?? [];
+  const answer = useSiteChanges(siteIds).data;
+  const changes = answer ?? [];
   const last = changes[0];
   return (
     <Tray
       said={
         <>
-          {last ? `${last.time} ${last.byName} ${last.what}. ` : "Nothing was changed here today. "}
+          {last && `${last.time} ${last.byName} ${last.what}. `}
+          {answer?.length === 0 && "Nothing was changed here yet. "}
           <button type="button" className="linklike" onClick={() => setIsOpen(true)}>
             Recent changes
           </button>
