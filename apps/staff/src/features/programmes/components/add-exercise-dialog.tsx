@@ -57,7 +57,10 @@ export function AddExerciseDialog({
             value={words}
             onChange={(event) => setWords(event.currentTarget.value)}
             onKeyDown={(event) => {
-              if (event.key === "Enter" && found[0]) onAdd(found[0].key);
+              if (event.key !== "Enter" || !found[0]) return;
+              // The same key must not press the button that focus goes back to.
+              event.preventDefault();
+              onAdd(found[0].key);
             }}
           />
           <Select
