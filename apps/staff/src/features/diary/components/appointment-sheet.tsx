@@ -12,6 +12,7 @@ import Link from "next/link";
 import { type ReactNode, useEffect, useRef } from "react";
 import { problemItems } from "@/api/form-problems";
 import { useAppointment } from "../hooks/use-appointment";
+import { useEscape } from "../hooks/use-escape";
 import { phoneWords } from "../phone-words";
 import { SheetStates, type SheetVerbs } from "./sheet-states";
 
@@ -31,12 +32,15 @@ export function AppointmentSheet({ appointmentId, today, verbs, onMove, onClose 
   useEffect(() => {
     if (isThere) heading.current?.focus({ preventScroll: true });
   }, [appointmentId, isThere]);
+  const version = query.data?.version;
+  // The button that was pressed may be gone with the state it belonged to; the focus must not go with it.
+  useEffect(() => {
+    if (version !== undefined && document.activeElement === document.body)
+      heading.current?.focus({ preventScroll: true });
+  }, [version]);
+  useEscape(onClose);
   return (
-    <aside
-      className="sheetside"
-      aria-label="The appointment"
-      onKeyDown={(event) => event.key === "Escape" && onClose()}
-    >
+    <aside className="sheetside" aria-label="The appointment">
       {query.error && <AlertLine tone="danger">{problemItems(query.error)[0]?.message}</AlertLine>}
       {query.isPending && <Skeleton lines={8} label="Loading the appointment" />}
       {query.data && (
