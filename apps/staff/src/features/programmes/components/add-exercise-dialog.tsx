@@ -48,7 +48,14 @@ export function AddExerciseDialog({
     >
       {/* biome-ignore lint/a11y/noStaticElementInteractions: the arrows only move focus between controls inside */}
       <div className="add-exercise" onKeyDown={walk}>
-        <div className="ask">
+        {/* A form, so that Enter is spent before focus goes back to the button that opened this. */}
+        <form
+          className="ask"
+          onSubmit={(event) => {
+            event.preventDefault();
+            if (found[0]) onAdd(found[0].key);
+          }}
+        >
           <TextInput
             id="find-exercise"
             ref={input}
@@ -56,12 +63,6 @@ export function AddExerciseDialog({
             label="Name, muscle or equipment"
             value={words}
             onChange={(event) => setWords(event.currentTarget.value)}
-            onKeyDown={(event) => {
-              if (event.key !== "Enter" || !found[0]) return;
-              // The same key must not press the button that focus goes back to.
-              event.preventDefault();
-              onAdd(found[0].key);
-            }}
           />
           <Select
             id="find-region"
@@ -70,7 +71,7 @@ export function AddExerciseDialog({
             value={region}
             onChange={(event) => setRegion(event.currentTarget.value as Region | "")}
           />
-        </div>
+        </form>
         <p className="small soft" role="status">
           {found.length === 0
             ? "Nothing matches. Try fewer letters or another region."
