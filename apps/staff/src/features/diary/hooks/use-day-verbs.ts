@@ -1,7 +1,10 @@
-import type { DayAppointment, DiaryDayView } from "@withy/contracts/diary";
+import { useQueryClient } from "@tanstack/react-query";
+import type { AppointmentView, DayAppointment, DiaryDayView } from "@withy/contracts/diary";
 import { useState } from "react";
 import { problemItems } from "@/api/form-problems";
 import type { Mark } from "../components/sheet-states";
+import { clock } from "../minute-words";
+import { diaryKeys } from "../query-keys";
 import type { Drag } from "./use-day-drag";
 import { useMarkAppointment } from "./use-mark-appointment";
 import { useMoveAppointment } from "./use-move-appointment";
@@ -13,6 +16,12 @@ export function useDayVerbs(day: DiaryDayView) {
   const move = useMoveAppointment();
   const undo = useUndoMark();
   const [problem, setProblem] = useState<string | null>(null);
+  const client = useQueryClient();
+  /** The day is read again a moment after a write; until then the write's own answer knows the newer version. */
+  const newest = (a: DayAppointment): { id: string; version: number; state: string } => {
+    const answered = client.getQueryData<AppointmentView>(diaryKeys.appointment(a.id));
+    return answered && answered.version > a.version ? answered : a;
+  };
   const answer = {
     onSuccess: () => setProblem(null),
     onError: (error: unknown) => setProblem(problemItems(error)[0]?.message ?? null),
@@ -23,15 +32,12 @@ export function useDayVerbs(day: DiaryDayView) {
     const isSame =
       to.minute === a.fromMinute && column?.id === (day.by === "room" ? a.roomId : a.therapistId);
     if (!column || (isSame && column.siteId === a.siteId)) return;
-    const time = `${Math.floor(to.minute / 60)
-      .toString()
-      .padStart(2, "0")}:${(to.minute % 60).toString().padStart(2, "0")}`;
     const origin = { startsAt: a.startsAt, siteId: a.siteId, therapistId: a.therapistId, roomId: a.roomId };
     const target = day.by === "room" ? { roomId: column.id } : { therapistId: column.id };
     const input = {
       appointmentId: a.id,
-      version: a.version,
-      startsAt: `${day.day}T${time}`,
+      version: newest(a).version,
+      startsAt: `${day.day}T${clock(to.minute)}`,
       siteId: column.siteId,
     };
     move.mutate({ ...input, ...target, origin }, answer);
@@ -43,8 +49,10 @@ export function useDayVerbs(day: DiaryDayView) {
     clear: () => setProblem(null),
     drop,
     mark: (a: DayAppointment, to: Mark) =>
-      mark.mutate({ appointmentId: a.id, version: a.version, to }, answer),
-    undo: (a: DayAppointment) =>
-      undo.mutate({ appointmentId: a.id, version: a.version, isCancelled: a.state === "cancelled" }, answer),
+      mark.mutate({ appointmentId: a.id, version: newest(a).version, to }, answer),
+    undo: (a: DayAppointment) => {
+      const { id, version, state } = newest(a);
+      undo.mutate({ appointmentId: id, version, isCancelled: state === "cancelled" }, answer);
+    },
   };
 }
