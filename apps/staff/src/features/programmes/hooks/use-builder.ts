@@ -14,21 +14,25 @@ export function useBuilder(first: ProgrammeView) {
   const [chosenId, choose] = useState<string | null>(null);
   const [ladderSays, setLadderSays] = useState<string | null>(null);
   const programme = kept.draft.content;
+  /** What the ladder last said belongs to that moment; the next change ends it. */
+  const change: typeof kept.change = (update) => {
+    setLadderSays(null);
+    kept.change(update);
+  };
 
   const focusLine = (id: string | null) => {
     if (id !== null) requestAnimationFrame(() => document.getElementById(`line-${id}`)?.focus());
   };
   const actions = {
     choose,
-    change: (id: string, change: Parameters<typeof changeItem>[2]) =>
-      kept.change((p) => changeItem(p, id, change)),
+    change: (id: string, to: Parameters<typeof changeItem>[2]) => change((p) => changeItem(p, id, to)),
     climb: (id: string, way: "easier" | "harder") => {
       const { programme: next, said } = climb(programme, id, way);
-      setLadderSays(said);
-      if (said === null) kept.change(() => next);
+      if (said === null) change(() => next);
+      else setLadderSays(said);
     },
     move: (id: string, to: number) => {
-      kept.change((p) => moveItem(p, id, to));
+      change((p) => moveItem(p, id, to));
       focusLine(id);
     },
     remove: (id: string) => {
@@ -37,16 +41,16 @@ export function useBuilder(first: ProgrammeView) {
       const item = items[index];
       if (!item) return;
       const name = findExercise(item.exercise)?.name ?? "A line";
-      kept.change((p) => removeItem(p, id));
+      change((p) => removeItem(p, id));
       choose(null);
       focusLine(items[index + 1]?.id ?? items[index - 1]?.id ?? null);
-      const undo = async () => kept.change((p) => putBack(p, item, index));
+      const undo = async () => change((p) => putBack(p, item, index));
       announce({ at: timeOf(new Date(), first.zone), said: `${name} removed from the programme`, undo });
     },
   };
   const add = (exerciseKey: string) => {
     const { programme: next, firstId } = addExercise(programme, exerciseKey, chosenId, newId);
-    kept.change(() => next);
+    change(() => next);
     choose(firstId);
     focusLine(firstId);
   };
