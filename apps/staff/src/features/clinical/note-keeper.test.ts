@@ -81,6 +81,22 @@ describe("the keeper of a draft", () => {
     expect(await flushed).toBe(true);
   });
 
+  it("sends one text at a time, however many wait for the save before it", async () => {
+    const answers: ((saved: { version: number; savedAt: string }) => void)[] = [];
+    const { made } = ports(() => new Promise((resolve) => answers.push(resolve)));
+    const keeper = new NoteKeeper(note, made);
+    keeper.change("plan", "Walk");
+    const waiting = [keeper.flush()];
+    keeper.change("plan", "Walk twice");
+    waiting.push(keeper.flush(), keeper.flush());
+    answers[0]?.({ version: 2, savedAt: "t" });
+    await vi.advanceTimersByTimeAsync(0);
+    expect(made.save).toHaveBeenCalledTimes(2);
+    answers[1]?.({ version: 3, savedAt: "t" });
+    expect(await Promise.all(waiting)).toEqual([true, true, true]);
+    expect(made.save).toHaveBeenCalledTimes(2);
+  });
+
   it("keeps the text here when the network fails, says so, tries again and then forgets the copy", async () => {
     let isDown = true;
     const { made, store } = ports(async (input) => {

@@ -102,7 +102,8 @@ export class NoteKeeper {
   /** Saves what is not saved yet. True once nothing is left. */
   async flush(): Promise<boolean> {
     this.stopTimers();
-    if (this.running) await this.running;
+    // Again and again: of several that wait for one save, another may have begun the next.
+    while (this.running) await this.running;
     if (this.view.clash) return false;
     if (this.isSaved(this.view.body)) return true;
     this.running = this.send();
