@@ -76,7 +76,8 @@ export function DayScreen({ first, sites, today, may }: DayScreenProps) {
     onMove: () => target && setDialog({ kind: "move", id: target.id }),
     onCancel: () => target && setDialog({ kind: "cancel", id: target.id }),
     onMark: verbs.mark,
-    onStep: (days) => goTo(addDays(day.day, days)),
+    // From the day that was asked for, so that quick presses add up while a day is still being read.
+    onStep: (days) => goTo(addDays(address.day ?? today, days)),
     onToday: () => goTo(today),
   });
 
