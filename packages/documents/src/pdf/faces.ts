@@ -1,7 +1,8 @@
-import { createRequire } from "node:module";
 import * as fontkit from "fontkit";
 
-const resolve = createRequire(import.meta.url).resolve;
+// Asked for at run time: a bundler that sees this call answers it itself, and font files are no modules of its own.
+const { createRequire } = process.getBuiltinModule("node:module");
+const { resolve } = createRequire(import.meta.url);
 
 /** What a caller asks for. Each face is a chain of fonts: a character that the first lacks is taken from the next. */
 export type Face = "serif" | "serif-bold" | "serif-italic" | "sans" | "sans-bold";
