@@ -16,7 +16,8 @@ export function ReadNote({ note, measures, day, visitDay, visitWords }: NotePart
   const isSigned = note.state === "signed";
   return (
     <>
-      <section className="write" id="write" aria-label={noteKindLabels[note.kind]}>
+      {/* biome-ignore lint/a11y/noNoninteractiveTabindex: it scrolls and holds no control, so keys must reach it */}
+      <section className="write" id="write" tabIndex={0} aria-label={noteKindLabels[note.kind]}>
         <div className="write-title">
           <h2>{noteKindLabels[note.kind]}</h2>
           <span className="soft small num">{visitWords}</span>
