@@ -44,26 +44,30 @@ const letters = (count: number) =>
   Array.from({ length: count }, () => syllables[randomInt(syllables.length)]).join("");
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
-/** Someone whom the practice does not know: a name, a birthday and a phone that no one there has. */
-export async function someoneNew(page: Page): Promise<NewPerson> {
+/** A name and an address that no one has yet. */
+export function newName() {
   const givenName = capital(letters(2));
   const familyName = capital(letters(5));
+  const email = `${familyName.toLowerCase()}.${randomInt(1e9)}@post.example`;
+  return { givenName, familyName, name: `${givenName} ${familyName}`, email };
+}
+
+/** Someone whom the practice does not know: a name, a birthday and a phone that no one there has. */
+export async function someoneNew(page: Page): Promise<NewPerson> {
   const [day, month, year] = [randomInt(1, 29), randomInt(1, 13), randomInt(1940, 2000)];
   const two = (n: number) => String(n).padStart(2, "0");
   return {
-    givenName,
-    familyName,
-    name: `${givenName} ${familyName}`,
+    ...newName(),
     bornText: `${day} ${month} ${year}`,
     bornOn: `${year}-${two(month)}-${two(day)}`,
     phone: await phoneOfNoOne(page),
-    email: `${familyName.toLowerCase()}.${randomInt(1e9)}@post.example`,
   };
 }
 
+/** Landlines: nearly every mobile number that may be invented belongs to a patient of the demonstration. */
 async function phoneOfNoOne(page: Page): Promise<string> {
   for (let tries = 0; tries < 40; tries += 1) {
-    const phone = `07700900${String(randomInt(1000)).padStart(3, "0")}`;
+    const phone = `01632960${String(randomInt(1000)).padStart(3, "0")}`;
     const found = await read<PatientPage>(page, `/api/patients?search=${phone}`);
     if (found.rows.length === 0) return phone;
   }
