@@ -1,5 +1,5 @@
 import { expectAccessible } from "./support/accessible";
-import { expect, test } from "./support/journey";
+import { type DemoPerson, expect, signIn, test } from "./support/journey";
 
 test("a wrong password is refused in words, and what was typed is kept", async ({ page }) => {
   await page.goto("/sign-in");
@@ -15,3 +15,20 @@ test("a page asked for without a session leads to the sign-in", async ({ page })
   await page.goto("/today");
   await expect(page).toHaveURL(/\/sign-in/);
 });
+
+const people: readonly DemoPerson[] = ["owner", "therapist", "reception", "accounts", "otherOwner"];
+
+for (const person of people) {
+  test(`every section that ${person} is offered opens`, async ({ page }) => {
+    await signIn(page, person);
+    const tabs = page.getByRole("banner").getByRole("navigation").getByRole("link");
+    const addresses = await tabs.evaluateAll((links) => links.map((link) => link.getAttribute("href") ?? ""));
+    expect(addresses.length).toBeGreaterThan(1);
+    for (const address of addresses) {
+      const answer = await page.goto(address);
+      expect(answer?.status(), address).toBe(200);
+      await expect(page.getByRole("heading", { level: 1 })).toBeVisible();
+      await expectAccessible(page);
+    }
+  });
+}

@@ -1,6 +1,6 @@
 import { randomInt, randomUUID } from "node:crypto";
 import type { APIResponse, Page } from "@playwright/test";
-import type { EpisodeView } from "@withy/contracts/clinical";
+import type { EpisodeView, NoteView } from "@withy/contracts/clinical";
 import type { AppointmentView, BookingChoicesView } from "@withy/contracts/diary";
 import type { GpPracticeView, PatientRow } from "@withy/contracts/patients";
 import { dayOf, instantAt } from "@withy/core/zoned-time";
@@ -125,6 +125,15 @@ export function openedEpisode(page: Page, visit: AppointmentView): Promise<Episo
   );
 }
 
+/** The note of a visit of today, begun and without words. */
+export async function begunNote(page: Page): Promise<{ patient: Treated; note: NoteView }> {
+  const patient = await registeredWithGp(page);
+  const visit = await arrivedToday(page, patient);
+  await openedEpisode(page, visit);
+  const note = await done<NoteView>(send(page, "POST", "/api/clinical/notes", { appointmentId: visit.id }));
+  return { patient, note };
+}
+
 /** A first assessment as a therapist writes it, by the words over each field. */
 export const assessment: readonly (readonly [heading: string, key: string, text: string])[] = [
   ["History", "history", "Ache behind the left kneecap for four months, worse on stairs and after sitting."],
@@ -136,3 +145,30 @@ export const assessment: readonly (readonly [heading: string, key: string, text:
   ["Treatment given", "treatment", "Step down at 10 cm practised, hand near the rail."],
   ["Plan", "plan", "Programme on three days a week. Seen again in ten days."],
 ];
+
+export const assessmentBody = Object.fromEntries(assessment.map(([, key, text]) => [key, text]));
+
+/** Signs the note through the API, with every heading written. */
+export async function signedByApi(page: Page, note: NoteView): Promise<void> {
+  const at = `/api/clinical/notes/${note.id}`;
+  const saved = await done<{ version: number }>(
+    send(page, "PUT", `${at}/draft`, { version: note.version, body: assessmentBody }),
+  );
+  await done(send(page, "POST", `${at}/sign`, { version: saved.version }));
+}
+
+/** The bytes behind an address are a PDF. */
+export async function expectPdf(page: Page, address: string): Promise<void> {
+  const answer = await page.request.get(address);
+  expect(answer.status(), address).toBe(200);
+  expect(answer.headers()["content-type"]).toBe("application/pdf");
+  expect((await answer.body()).subarray(0, 5).toString("latin1")).toBe("%PDF-");
+}
+
+/** Presses again until it has an effect: a page that has just come may not have woken yet. */
+export async function pressUntil(press: () => Promise<void>, effect: () => Promise<void>): Promise<void> {
+  await expect(async () => {
+    await press();
+    await effect();
+  }).toPass({ timeout: 60_000 });
+}
