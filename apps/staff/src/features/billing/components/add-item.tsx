@@ -6,6 +6,7 @@ import { SectionHead } from "@withy/ui/section-head";
 import { Select } from "@withy/ui/select";
 import { TextInput } from "@withy/ui/text-input";
 import { useState } from "react";
+import { useAwake } from "@/components/use-awake";
 import { useProducts } from "../hooks/use-products";
 
 interface AddItemProps {
@@ -17,6 +18,7 @@ interface AddItemProps {
 /** Puts goods on the draft at today's price. */
 export function AddItem({ invoiceId, busy, onAdd }: AddItemProps) {
   const products = useProducts(invoiceId);
+  const isAwake = useAwake();
   const [productId, setProductId] = useState("");
   const [quantity, setQuantity] = useState("1");
   const [wrong, setWrong] = useState<{ product?: string; quantity?: string }>({});
@@ -64,7 +66,7 @@ export function AddItem({ invoiceId, busy, onAdd }: AddItemProps) {
           onChange={(event) => setQuantity(event.target.value)}
           error={wrong.quantity}
         />
-        <Button type="submit" busy={busy}>
+        <Button type="submit" disabled={!isAwake} busy={busy}>
           Add it
         </Button>
       </div>

@@ -9,6 +9,7 @@ import { TextInput } from "@withy/ui/text-input";
 import { useRef, useState } from "react";
 import { problemItems } from "@/api/form-problems";
 import { useShortcut } from "@/components/shortcuts/shortcut-provider";
+import { useAwake } from "@/components/use-awake";
 import { useStartCardPayment } from "../hooks/use-start-card-payment";
 import { useTakePayment } from "../hooks/use-take-payment";
 import { PaymentWays } from "./payment-ways";
@@ -19,6 +20,7 @@ const inputId = (field: string) => (field === "amountPence" ? "pay-amount" : `pa
 export function PaymentForm({ invoice }: { invoice: InvoiceView }) {
   const take = useTakePayment();
   const start = useStartCardPayment();
+  const isAwake = useAwake();
   const ways = useRef<HTMLFieldSetElement>(null);
   const [amount, setAmount] = useState(formatMoney(invoice.freePence).slice(1));
   const [method, setMethod] = useState<PaymentMethod>("terminal");
@@ -81,6 +83,7 @@ export function PaymentForm({ invoice }: { invoice: InvoiceView }) {
         kind="primary"
         size="wide"
         type="submit"
+        disabled={!isAwake}
         shortcut="Enter"
         busy={take.isPending || start.isPending}
       >

@@ -7,6 +7,7 @@ import { SectionHead } from "@withy/ui/section-head";
 import { TextInput } from "@withy/ui/text-input";
 import { useState } from "react";
 import { problemItems } from "@/api/form-problems";
+import { useAwake } from "@/components/use-awake";
 import { saveGoals } from "../api-client";
 import { useEpisodeWrite } from "../hooks/use-episode";
 import { shortDay } from "../site-time";
@@ -14,6 +15,7 @@ import { shortDay } from "../site-time";
 /** The patient's goals; a tick says that one is met and keeps the day. */
 export function GoalsForm({ episode, canWrite }: { episode: EpisodeView; canWrite: boolean }) {
   const save = useEpisodeWrite(saveGoals);
+  const isAwake = useAwake();
   const [text, setText] = useState("");
   const goals = episode.goals.map((goal) => ({ text: goal.text, isMet: goal.metOn !== null }));
   const send = (changed: typeof goals) =>
@@ -60,7 +62,7 @@ export function GoalsForm({ episode, canWrite }: { episode: EpisodeView; canWrit
             onChange={(event) => setText(event.target.value)}
           />
           <Buttons>
-            <Button size="small" type="submit" busy={save.isPending}>
+            <Button size="small" type="submit" disabled={!isAwake} busy={save.isPending}>
               Add the goal
             </Button>
           </Buttons>

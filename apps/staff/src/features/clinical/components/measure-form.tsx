@@ -10,6 +10,7 @@ import { ErrorSummary, type FieldError } from "@withy/ui/error-summary";
 import { TextInput } from "@withy/ui/text-input";
 import { useState } from "react";
 import { problemItems } from "@/api/form-problems";
+import { useAwake } from "@/components/use-awake";
 import { useRecordMeasure } from "../hooks/use-record-measure";
 import { emptyFields, entryFrom, isBlank, type TypedMeasure } from "../typed-measure";
 import { Activities } from "./activity-fields";
@@ -81,6 +82,7 @@ export function MeasureForm({
   onClose,
 }: MeasureFormProps) {
   const record = useRecordMeasure(episodeId);
+  const isAwake = useAwake();
   const [typed, setTyped] = useState(() => emptyFields(measure, lastActivities));
   const [refused, setRefused] = useState<FieldError | null>(null);
   const errors: FieldError[] = refused ? [refused] : record.error ? problemItems(record.error) : [];
@@ -116,7 +118,7 @@ export function MeasureForm({
       </p>
       {alarm !== null && <AlertLine tone="danger">{alarm}</AlertLine>}
       <Buttons>
-        <Button kind="primary" type="submit" busy={record.isPending}>
+        <Button kind="primary" type="submit" disabled={!isAwake} busy={record.isPending}>
           Record {measure.shortLabel}
         </Button>
         <Button onClick={onClose}>Leave it</Button>

@@ -6,6 +6,7 @@ import Link from "next/link";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
 import { problemItems } from "@/api/form-problems";
+import { useAwake } from "@/components/use-awake";
 import { useOpenEpisode } from "../hooks/use-open-episode";
 import { useStartNote } from "../hooks/use-start-note";
 import { emptyEpisode, episodeFrom, problemsIn } from "../typed-episode";
@@ -25,6 +26,7 @@ export function OpenEpisodeForm({ patientId, sites, deskSiteId, visitId }: OpenE
   const router = useRouter();
   const open = useOpenEpisode();
   const start = useStartNote();
+  const isAwake = useAwake();
   const desk = sites.find((site) => site.id === deskSiteId) ?? sites[0];
   const [typed, setTyped] = useState(() => emptyEpisode(desk?.id ?? ""));
   const [refused, setRefused] = useState<{ errors: FieldError[]; attempt: number }>({
@@ -65,7 +67,7 @@ export function OpenEpisodeForm({ patientId, sites, deskSiteId, visitId }: OpenE
             problem={(id) => errors.find((error) => error.id === id)?.message}
           />
           <Buttons>
-            <Button kind="primary" type="submit" busy={open.isPending || start.isPending}>
+            <Button kind="primary" type="submit" disabled={!isAwake} busy={open.isPending || start.isPending}>
               {visitId === null ? "Open the episode" : "Open it and write the note"}
             </Button>
             <ButtonLink as={Link} href={`/patients/${patientId}/episodes`}>

@@ -8,6 +8,7 @@ import { Glyph } from "@withy/ui/glyph";
 import { PageTitle } from "@withy/ui/page";
 import Link from "next/link";
 import { type FormEvent, useState } from "react";
+import { useAwake } from "@/components/use-awake";
 
 export interface DayTitleProps {
   day: DiaryDayView;
@@ -76,6 +77,7 @@ function DaySteps({ day, today, onDay }: { day: string; today: string; onDay: (d
 function DayJump({ today, onDay }: { today: string; onDay: (day: string) => void }) {
   const [text, setText] = useState("");
   const [isWrong, setIsWrong] = useState(false);
+  const isAwake = useAwake();
   const day = text.trim() === "" ? null : readDate(text, today);
   const go = (event: FormEvent) => {
     event.preventDefault();
@@ -94,6 +96,7 @@ function DayJump({ today, onDay }: { today: string; onDay: (day: string) => void
         className="input"
         placeholder="next tue, 8 dec"
         autoComplete="off"
+        disabled={!isAwake}
         value={text}
         onChange={(event) => {
           setText(event.target.value);

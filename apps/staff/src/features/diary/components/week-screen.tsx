@@ -12,6 +12,7 @@ import Link from "next/link";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
 import { useShortcut } from "@/components/shortcuts/shortcut-provider";
+import { useAwake } from "@/components/use-awake";
 import { useTherapistWeek } from "../hooks/use-therapist-week";
 import { span } from "../minute-words";
 import { WeekList } from "./week-list";
@@ -93,6 +94,7 @@ function WeekSteps({
   onDay: (day: string) => void;
 }) {
   const [text, setText] = useState("");
+  const isAwake = useAwake();
   const found = text.trim() === "" ? null : readDate(text, today);
   return (
     <div className="btns daysteps">
@@ -130,6 +132,7 @@ function WeekSteps({
           className="input"
           placeholder="in 2 weeks, 8 dec"
           autoComplete="off"
+          disabled={!isAwake}
           value={text}
           onChange={(event) => setText(event.target.value)}
         />
