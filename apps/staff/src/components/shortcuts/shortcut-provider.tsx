@@ -1,13 +1,22 @@
 "use client";
 import { useRouter } from "next/navigation";
-import { createContext, type ReactNode, useContext, useEffect, useMemo, useRef, useState } from "react";
+import {
+  createContext,
+  type ReactNode,
+  useCallback,
+  useContext,
+  useEffect,
+  useMemo,
+  useRef,
+  useState,
+} from "react";
 import { matchKeys, pressed } from "./match-keys";
 import { type ShortcutId, shortcuts } from "./shortcut-table";
 
 type Handler = () => void;
 
 interface Registry {
-  /** Registers a handler until the returned function is called; the latest one wins. */
+  /** Registers a handler until the returned function is called; the latest one wins. The same function for good. */
   on(id: ShortcutId, handler: Handler): () => void;
   run(id: ShortcutId): void;
   active(): ReadonlySet<ShortcutId>;
@@ -26,6 +35,14 @@ export function ShortcutProvider({ children }: { children: ReactNode }) {
   useEffect(() => {
     setAreOn(window.localStorage.getItem(storageKey) !== "off");
   }, []);
+  const on = useCallback<Registry["on"]>((id, handler) => {
+    handlers.current.set(id, [...(handlers.current.get(id) ?? []), handler]);
+    return () =>
+      handlers.current.set(
+        id,
+        (handlers.current.get(id) ?? []).filter((h) => h !== handler),
+      );
+  }, []);
   const registry = useMemo<Registry>(() => {
     const run = (id: ShortcutId) => {
       const handler = handlers.current.get(id)?.at(-1);
@@ -34,23 +51,16 @@ export function ShortcutProvider({ children }: { children: ReactNode }) {
       if (entry && "href" in entry) router.push(entry.href);
     };
     return {
-      on(id, handler) {
-        handlers.current.set(id, [...(handlers.current.get(id) ?? []), handler]);
-        return () =>
-          handlers.current.set(
-            id,
-            (handlers.current.get(id) ?? []).filter((h) => h !== handler),
-          );
-      },
+      on,
       run,
       active: () => new Set([...handlers.current].filter(([, list]) => list.length > 0).map(([id]) => id)),
       areOn,
-      switchKeys(on) {
-        window.localStorage.setItem(storageKey, on ? "on" : "off");
-        setAreOn(on);
+      switchKeys(areNowOn) {
+        window.localStorage.setItem(storageKey, areNowOn ? "on" : "off");
+        setAreOn(areNowOn);
       },
     };
-  }, [router, areOn]);
+  }, [router, on, areOn]);
   useEffect(() => {
     const listen = matchKeys({
       areSingleKeysOn: () => areOn,
@@ -77,6 +87,5 @@ export function useShortcut(id: ShortcutId, handler: Handler, enabled = true): v
   useEffect(() => {
     latest.current = handler;
   });
-  // biome-ignore lint/correctness/useExhaustiveDependencies: `on` reads a ref and is as good as stable
-  useEffect(() => (enabled ? on(id, () => latest.current()) : undefined), [id, enabled]);
+  useEffect(() => (enabled ? on(id, () => latest.current()) : undefined), [on, id, enabled]);
 }
