@@ -2,6 +2,7 @@ import { hostname } from "node:os";
 import { systemClock } from "@withy/core/clock";
 import { newId } from "@withy/core/ids";
 import { connect } from "@withy/services/database";
+import { jobHandlers } from "@withy/services/job-handlers";
 import { openMail } from "@withy/services/messaging";
 import { pino } from "pino";
 import { readEnv } from "./env";
@@ -12,11 +13,9 @@ const log = pino({ level: env.logLevel, base: { program: "worker" } });
 const connection = connect(env.databaseUrl, { connectionLimit: 5 });
 const mail = openMail(env.smtp);
 
-/** Name and message only; a failed query's own message carries its values, so of that only the error number is kept. */
+/** Name and message only. A failed statement comes as a `DatabaseError`, without its text and values. */
 function describe(error: unknown): Record<string, unknown> {
   if (!(error instanceof Error)) return { name: typeof error };
-  if (error.cause instanceof Error && "errno" in error.cause)
-    return { name: "query failed", errno: error.cause.errno };
   return { name: error.name, message: error.message };
 }
 
@@ -25,10 +24,11 @@ const worker = runWorker({
   mail,
   fromAddress: env.fromAddress,
   appUrl: env.appUrl,
-  jobHandlers: {},
+  jobHandlers,
   newContext: () => ({ clock: systemClock, db: connection.db, requestId: newId() }),
   onFault: ({ messageId, template, error }) =>
     log.error({ messageId, template, error: describe(error) }, "message failed"),
+  onJobFault: ({ jobId, kind, error }) => log.error({ jobId, kind, error: describe(error) }, "job failed"),
   onTrouble: (what, error) => log.error({ what, error: describe(error) }, "worker in trouble, trying again"),
 });
 log.info("worker ready");

@@ -1,5 +1,6 @@
-import { drizzle, type MySql2Database } from "drizzle-orm/mysql2";
+import type { MySql2Database } from "drizzle-orm/mysql2";
 import mysql, { type Pool } from "mysql2/promise";
+import { openDatabase } from "./quiet-session";
 
 /** The connection pool or a transaction on it: whatever a query can be run on. */
 export type Database = Omit<MySql2Database<Record<string, never>>, "$client">;
@@ -26,5 +27,5 @@ export function connect(url: string, options: { connectionLimit?: number } = {})
   pool.pool.on("connection", (connection) => {
     connection.query("set session time_zone = '+00:00'");
   });
-  return { db: drizzle(pool), pool, close: () => pool.end() };
+  return { db: openDatabase(pool), pool, close: () => pool.end() };
 }

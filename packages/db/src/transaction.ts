@@ -1,5 +1,5 @@
 import type { Database } from "./client";
-import { databaseErrno, unwrapDatabaseError } from "./database-error";
+import { DatabaseError } from "./database-error";
 
 const deadlock = 1213;
 const lockWait = 1205;
@@ -17,8 +17,8 @@ export async function runInTransaction<T>(db: Database, work: (tx: Database) => 
         isolationLevel: "read committed",
       });
     } catch (error) {
-      const errno = databaseErrno(error);
-      if ((errno !== deadlock && errno !== lockWait) || attempt === tries) throw unwrapDatabaseError(error);
+      const isPassing = error instanceof DatabaseError && [deadlock, lockWait].includes(error.errno);
+      if (!isPassing || attempt === tries) throw error;
       await new Promise((resolve) => setTimeout(resolve, Math.random() * 15 * 2 ** attempt));
     }
   }

@@ -124,10 +124,8 @@ export function problemResponse(error: unknown, requestId: string, method: strin
   });
 }
 
-/** Name, message and place of an error. A failed statement's own text carries every value, so only its number is told. */
+/** Name, message and place of an error. A failed statement comes as a `DatabaseError`, without its text and values. */
 export function describe(error: unknown): Record<string, unknown> {
   if (!(error instanceof Error)) return { name: typeof error };
-  if (error.cause instanceof Error && "errno" in error.cause)
-    return { name: "FailedStatement", errno: error.cause.errno };
   return { name: error.name, message: error.message, stack: error.stack };
 }

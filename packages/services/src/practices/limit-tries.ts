@@ -1,5 +1,6 @@
 import { AppError } from "@withy/core/errors";
 import type { Connection } from "@withy/db/client";
+import { unwrapDatabaseError } from "@withy/db/database-error";
 import { RateLimiterMySQL, type RateLimiterRes } from "rate-limiter-flexible";
 
 /** A counter of tries under one prefix, kept in the database so that every app process sees it. It lapses by itself. */
@@ -25,7 +26,7 @@ export async function countTry(limiter: RateLimiterMySQL, key: string, advice: s
   try {
     await limiter.consume(key);
   } catch (error) {
-    if (error instanceof Error) throw error;
+    if (error instanceof Error) throw unwrapDatabaseError(error);
     const wait = Math.max(1, Math.ceil((error as RateLimiterRes).msBeforeNext / 60_000));
     throw new AppError(
       "refused",
