@@ -1,6 +1,13 @@
+import { newItems } from "@withy/clinical/programmes/new-item";
 import { newId } from "@withy/core/ids";
 import { notes } from "@withy/db/schema";
-import { recordRedFlags, saveGoals } from "@withy/services/clinical";
+import {
+  createProgramme,
+  issueProgramme,
+  recordRedFlags,
+  saveGoals,
+  saveProgramme,
+} from "@withy/services/clinical";
 import { draftDischargeLetter, getLetter } from "@withy/services/letters";
 import { and, eq } from "drizzle-orm";
 import { beforeAll, describe, expect, it } from "vitest";
@@ -108,6 +115,24 @@ describe("a discharge letter", () => {
     expect(texts).toContain("Goal: Walk to the harbour (met by 1 December 2026).");
     expect(texts).toContain("Warning signs present: Weight lost without trying.");
     expect(texts).toContain("Please review the warning signs under Safety alerts.");
+  });
+
+  it("names the programme that was given out, each exercise with its form", async () => {
+    const treated = await addNote(practice);
+    const ctx = therapistOf(practice);
+    const programme = await createProgramme(ctx, { episodeId: treated.episode.id });
+    const items = ["sit-to-stand", "bridge"].flatMap((key) => newItems(key, "timed", newId));
+    const { id: programmeId, version } = await saveProgramme(ctx, {
+      programmeId: programme.id,
+      version: programme.version,
+      title: programme.title,
+      content: structuredClone({ ...programme.content, items }) as never,
+    });
+    await issueProgramme(ctx, { programmeId, version });
+    const letter = await draftDischargeLetter(ctx, { episodeId: treated.episode.id });
+    expect(findSentence(letter, "advice:programme")?.text).toMatch(
+      /^Home programme of two exercises, .*: sit to stand \(from a chair, no hands\) and bridge \(both feet down\)\.$/,
+    );
   });
 
   it("is held against the record whenever it is looked at: a changed score makes one sentence stale", async () => {

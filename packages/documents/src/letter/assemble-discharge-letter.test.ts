@@ -42,7 +42,7 @@ describe("a discharge letter assembled from the record", () => {
       "Treatment on 1 December 2026: practice on stairs.",
     ]);
     expect(textsOf(hipFacts, "advice")[0]).toBe(
-      "Home programme of three exercises, two rounds, about 20 minutes a session, on three days a week: sit to stand, bridge and side step.",
+      "Home programme of three exercises, two rounds, about 20 minutes a session, on three days a week: sit to stand (from a chair, no hands), bridge (both feet down) and side stepping (knees soft).",
     );
     expect(textsOf(hipFacts, "allergies")).toEqual([
       "Not recorded separately by this service; see Relevant history for what was asked.",

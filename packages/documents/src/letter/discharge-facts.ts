@@ -32,6 +32,7 @@ export interface MeasureFact {
 export interface ProgrammeFact {
   readonly programmeId: string;
   readonly on: PlainDateText;
+  /** Each with its form in brackets. */
   readonly exercises: readonly string[];
   readonly rounds: number;
   /** Length of one session in seconds. */

@@ -92,7 +92,11 @@ export const hipFacts: DischargeFacts = {
   programme: {
     programmeId: id(8),
     on: "2026-11-24",
-    exercises: ["sit to stand", "bridge", "side step"],
+    exercises: [
+      "sit to stand (from a chair, no hands)",
+      "bridge (both feet down)",
+      "side stepping (knees soft)",
+    ],
     rounds: 2,
     sessionSeconds: 1200,
     sessionsPerWeek: 3,

@@ -1,4 +1,3 @@
-import { findExercise } from "@withy/clinical/exercises/library";
 import { sessionTime } from "@withy/clinical/programmes/compute-time";
 import { dayOf } from "@withy/core/zoned-time";
 import { programmes, programmeVersions } from "@withy/db/schema";
@@ -6,6 +5,7 @@ import type { ProgrammeFact } from "@withy/documents/letter/discharge-facts";
 import { and, desc, eq, isNotNull } from "drizzle-orm";
 import { contentOf } from "../clinical/programmes/programme-records";
 import type { Context } from "../context";
+import { exerciseWords } from "./exercise-words";
 
 /** The programme that the patient was last given in this episode; null where none was given out. */
 export async function programmeFact(
@@ -34,11 +34,10 @@ export async function programmeFact(
     .limit(1);
   if (!row?.version.issuedAt) return null;
   const content = contentOf(row.version);
-  const names = content.items.flatMap((item) => findExercise(item.exercise)?.name.toLowerCase() ?? []);
   return {
     programmeId: row.version.programmeId,
     on: dayOf(row.version.issuedAt, zone),
-    exercises: [...new Set(names)],
+    exercises: exerciseWords(content.items),
     rounds: content.rounds,
     sessionSeconds: sessionTime(content).elapsedSeconds,
     sessionsPerWeek: content.sessionsPerWeek,
