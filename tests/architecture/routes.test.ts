@@ -55,6 +55,7 @@ test("a read needs no permission to write", () => {
   expect(odd.map(({ verb }) => verb).sort()).toEqual([
     "findTimes",
     "getBookingChoices",
+    "getDraftingJob",
     "getPracticeSettings",
     "listProducts",
     "listStaff",

@@ -13,6 +13,8 @@ export interface WorkerOptions extends DrainOptions {
   /** A context of its own for each round, so that a log line names the round. */
   readonly newContext: () => SystemContext;
   readonly jobHandlers: Readonly<Record<string, JobHandler>>;
+  /** Told of a job that failed, without personal data. */
+  readonly onJobFault: (fault: { jobId: string; kind: string; error: unknown }) => void;
   readonly onTrouble: (what: string, error: unknown) => void;
   readonly idleMs?: number;
   readonly beatMs?: number;
@@ -20,7 +22,7 @@ export interface WorkerOptions extends DrainOptions {
 }
 
 export interface Worker {
-  /** Ends after the message or job in hand. */
+  /** Ends after the message in hand and the part of a job in hand; the rest of that job waits for the next worker. */
   stop(): Promise<void>;
 }
 
@@ -71,7 +73,8 @@ export function runWorker(options: WorkerOptions): Worker {
       (await drainOutbox(newContext(), options)) > 0 ? 0 : idleMs,
     ),
     repeat(control.signal, options, "jobs", async () => {
-      const ran = await runNextJob(newContext(), { workerId, handlers: options.jobHandlers });
+      const { jobHandlers: handlers, onJobFault: onFault } = options;
+      const ran = await runNextJob(newContext(), { workerId, handlers, onFault, signal: control.signal });
       return ran ? 0 : idleMs;
     }),
     repeat(control.signal, options, "housekeeping", async () =>

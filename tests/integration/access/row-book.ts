@@ -4,6 +4,7 @@ import {
   cardAttempts,
   invoiceLines,
   invoices,
+  jobs,
   letters,
   measureRecords,
   notes,
@@ -111,6 +112,8 @@ export async function writeRowBook(practice: TestPractice): Promise<RowBook> {
     deskSiteId: sites.saltgate.id,
   };
   await db.insert(sessions).values(session);
+  const job = { id: newId(), practiceId, kind: "billing.draft-visits", input: {}, state: "done" as const };
+  await db.insert(jobs).values({ ...job, dueAt: now, createdAt: now });
   return {
     patientId: patient.id,
     episodeId: episode.id,
@@ -124,6 +127,7 @@ export async function writeRowBook(practice: TestPractice): Promise<RowBook> {
     ...money,
     messageId: message.id,
     sessionId: session.id,
+    jobId: job.id,
     serviceId: practice.services.followUp.id,
     productId: practice.products.band.id,
     payerId: practice.payers.insurer.id,

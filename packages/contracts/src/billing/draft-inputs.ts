@@ -3,9 +3,13 @@ import type { Pence } from "@withy/core/money";
 import type { PlainDateText } from "@withy/core/zoned-time";
 import { z } from "zod";
 import { idField, requiredText, versionField } from "../fields";
+import type { JobView } from "../jobs";
+
+/** The most visits that one request drafts; where more wait, drafting is a job (`startDrafting`). */
+export const mostVisitsAtOnce = 100;
 
 export const draftInvoicesInput = z.strictObject({
-  /** One patient's visits only; left out, every attended visit that the person may bill. */
+  /** One patient's visits only; left out, the attended visits that the person may bill. */
   patientId: idField.optional(),
   siteId: idField.optional(),
 });
@@ -76,6 +80,8 @@ export interface ToIssueView {
   readonly visitsTotalPence: Pence;
   /** The list holds the oldest visits only; more come once these are drafted. */
   readonly areMoreVisits: boolean;
+  /** This person's drafting that is not finished yet. */
+  readonly drafting: DraftingJobView | null;
 }
 
 export interface DraftedView {
@@ -83,6 +89,14 @@ export interface DraftedView {
   readonly visitsDrafted: number;
   readonly visitsWithoutPrice: number;
 }
+
+/** What a drafting job has done so far, over all its tries. */
+export interface DraftingResult {
+  readonly drafts: number;
+  readonly visitsDrafted: number;
+  readonly visitsWithoutPrice: number;
+}
+export type DraftingJobView = JobView<DraftingResult>;
 
 export interface ProductView {
   readonly id: string;

@@ -17,17 +17,26 @@ type Actor = SystemContext & { readonly practiceId: string; readonly staffMember
 
 /** Writes one audit row with the caller's transaction, so that neither stands without the other. */
 export async function recordAudit(ctx: Actor, entry: AuditEntry): Promise<void> {
-  await ctx.db.insert(auditEvents).values({
-    practiceId: ctx.practiceId,
-    id: newId(),
-    at: ctx.clock.now(),
-    actorId: ctx.staffMemberId ?? null,
-    action: entry.action,
-    subjectKind: entry.subjectKind,
-    subjectId: entry.subjectId,
-    patientId: entry.patientId ?? null,
-    siteId: entry.siteId ?? null,
-    requestId: ctx.requestId,
-    detail: entry.detail ?? {},
-  });
+  await recordAudits(ctx, [entry]);
+}
+
+/** Writes one audit row for each entry in one statement, with the caller's transaction. */
+export async function recordAudits(ctx: Actor, entries: readonly AuditEntry[]): Promise<void> {
+  if (entries.length === 0) return;
+  const at = ctx.clock.now();
+  await ctx.db.insert(auditEvents).values(
+    entries.map((entry) => ({
+      practiceId: ctx.practiceId,
+      id: newId(),
+      at,
+      actorId: ctx.staffMemberId ?? null,
+      action: entry.action,
+      subjectKind: entry.subjectKind,
+      subjectId: entry.subjectId,
+      patientId: entry.patientId ?? null,
+      siteId: entry.siteId ?? null,
+      requestId: ctx.requestId,
+      detail: entry.detail ?? {},
+    })),
+  );
 }

@@ -5,14 +5,21 @@ import { dayOf } from "@withy/core/zoned-time";
 import { appointments, invoiceLines, invoices, patients, payers, sites } from "@withy/db/schema";
 import { and, asc, eq, inArray, sql } from "drizzle-orm";
 import type { Context } from "../context";
+import { findLiveJob } from "../messaging/start-job";
 import { verb } from "../verb";
+import { draftingView, draftVisitsKind } from "./draft-visits-job";
+import { draftingKey } from "./start-drafting";
 import { mostVisits, visitsToInvoice } from "./visits-to-invoice";
 
 type Wish = { siteId?: string | undefined; patientId?: string | undefined };
 
 /** What waits to become an invoice: drafts to issue, and attended visits that are on no draft yet. */
 export const listToIssue = verb("billing.draft", listDraftsInput, async (ctx, wish): Promise<ToIssueView> => {
-  const [drafts, visits] = await Promise.all([listDrafts(ctx, wish), visitsToInvoice(ctx, wish)]);
+  const [drafts, visits, live] = await Promise.all([
+    listDrafts(ctx, wish),
+    visitsToInvoice(ctx, wish),
+    findLiveJob(ctx, draftVisitsKind, draftingKey(ctx, wish)),
+  ]);
   return {
     drafts,
     draftsTotalPence: sumPence(drafts.map((d) => d.totalPence)),
@@ -27,6 +34,7 @@ export const listToIssue = verb("billing.draft", listDraftsInput, async (ctx, wi
       pricePence: v.price?.amountPence ?? null,
     })),
     areMoreVisits: visits.length >= mostVisits,
+    drafting: live && draftingView(live),
     visitsTotalPence: sumPence(visits.map((v) => v.price?.amountPence ?? 0)),
   };
 });

@@ -1,10 +1,46 @@
-import { type InvoiceTotals, invoiceTotals, vatRoundings } from "@withy/billing/invoice-totals";
-import { isVatRegistered, type VatTreatment, vatBasisPoints } from "@withy/billing/vat";
+import { draftSums } from "@withy/billing/draft-sums";
+import type { InvoiceTotals } from "@withy/billing/invoice-totals";
+import type { VatTreatment } from "@withy/billing/vat";
 import { invoiceLines, invoices } from "@withy/db/schema";
 import { and, asc, eq } from "drizzle-orm";
 import type { Context } from "../context";
 import type { InvoiceRow } from "./load-invoice";
-import { loadPractice } from "./load-practice";
+import { loadPractice, type PracticeRow } from "./load-practice";
+
+export type LineRow = typeof invoiceLines.$inferSelect;
+
+type SummedLine = Omit<LineRow, "vatTreatment"> & { readonly vatTreatment: string };
+
+/** A whole draft's lines with their sums, in the order given, and what changes with them on the invoice. */
+export function reckonLines<L extends SummedLine>(lines: readonly L[], practice: PracticeRow) {
+  const treated = lines.map((line) => ({ ...line, vatTreatment: line.vatTreatment as VatTreatment }));
+  const { lines: sums, totals } = draftSums(treated, practice);
+  const { netPence, vatPence, grossPence: totalPence } = totals;
+  const { vatRounding, vatNumber } = practice;
+  return {
+    totals,
+    lines: lines.map((line, i): L => ({ ...line, ...sums[i] })),
+    invoice: { netPence, vatPence, totalPence, vatRounding, vatNumber },
+  };
+}
+
+/** Writes the sums of lines that already stand, but for those that hold them already. */
+export async function writeLineSums(
+  ctx: Context,
+  before: readonly LineRow[],
+  after: readonly LineRow[],
+): Promise<void> {
+  for (const [i, { vatBasisPoints, netPence, vatPence, totalPence, id }] of after.entries()) {
+    const was = before[i];
+    const isSame =
+      was?.vatBasisPoints === vatBasisPoints && was.netPence === netPence && was.vatPence === vatPence;
+    if (isSame && was.totalPence === totalPence) continue;
+    await ctx.db
+      .update(invoiceLines)
+      .set({ vatBasisPoints, netPence, vatPence, totalPence })
+      .where(and(eq(invoiceLines.practiceId, ctx.practiceId), eq(invoiceLines.id, id)));
+  }
+}
 
 /**
  * Adds up a draft's lines by the practice's rounding and registration of today, and writes the sums to the lines
@@ -17,46 +53,16 @@ export async function reckonDraft(
 ): Promise<InvoiceTotals> {
   const practice = await loadPractice(ctx);
   const ofInvoice = and(eq(invoiceLines.practiceId, ctx.practiceId), eq(invoiceLines.invoiceId, invoice.id));
-  const lines = await ctx.db.select().from(invoiceLines).where(ofInvoice).orderBy(asc(invoiceLines.position));
-  const isRegistered = isVatRegistered(practice);
-  const totals = invoiceTotals(
-    lines.map((line) => ({
-      quantity: line.quantity,
-      unitPricePence: line.unitPence,
-      isVatInclusive: false,
-      discount:
-        line.discountBasisPoints === 0 ? null : { kind: "percent", basisPoints: line.discountBasisPoints },
-      vatTreatment: line.vatTreatment as VatTreatment,
-    })),
-    vatRoundings[practice.vatRounding],
-    isRegistered,
-  );
-  for (const [i, line] of lines.entries()) {
-    const sums = totals.lines[i];
-    if (!sums) continue;
-    const rate = isRegistered ? vatBasisPoints[line.vatTreatment as VatTreatment] : 0;
-    await ctx.db
-      .update(invoiceLines)
-      .set({
-        netPence: sums.netPence,
-        vatPence: sums.vatPence,
-        totalPence: sums.grossPence,
-        vatBasisPoints: rate,
-      })
-      .where(and(eq(invoiceLines.practiceId, ctx.practiceId), eq(invoiceLines.id, line.id)));
-  }
+  const before = await ctx.db
+    .select()
+    .from(invoiceLines)
+    .where(ofInvoice)
+    .orderBy(asc(invoiceLines.position));
+  const reckoned = reckonLines(before, practice);
+  await writeLineSums(ctx, before, reckoned.lines);
   await ctx.db
     .update(invoices)
-    .set({
-      netPence: totals.netPence,
-      vatPence: totals.vatPence,
-      totalPence: totals.grossPence,
-      vatRounding: practice.vatRounding,
-      vatNumber: practice.vatNumber,
-      version: invoice.version + 1,
-      updatedAt: ctx.clock.now(),
-      ...more,
-    })
+    .set({ ...reckoned.invoice, version: invoice.version + 1, updatedAt: ctx.clock.now(), ...more })
     .where(and(eq(invoices.practiceId, ctx.practiceId), eq(invoices.id, invoice.id)));
-  return totals;
+  return reckoned.totals;
 }

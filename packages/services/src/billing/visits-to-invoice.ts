@@ -31,8 +31,13 @@ export interface VisitToInvoice {
 /** How far back visits are looked for: a year-old visit is a question for a person, not for a list. */
 const daysBack = 180;
 
-/** The most visits that one list shows or one run drafts; the oldest come first, the rest come with the next. */
+/** The most visits that one list shows; the oldest come first, the rest once these are drafted. */
 export const mostVisits = 1000;
+
+export type PricedVisit = VisitToInvoice & { readonly price: Price };
+
+/** A visit without a price waits for a person, and is never drafted. */
+export const hasPrice = (visit: VisitToInvoice): visit is PricedVisit => visit.price !== null;
 
 /** The practice's price list in the shape that the rule takes. */
 export async function loadPrices(ctx: Context): Promise<Price[]> {
@@ -40,14 +45,18 @@ export async function loadPrices(ctx: Context): Promise<Price[]> {
   return rows.map((row) => ({ ...row, itemId: row.serviceId ?? row.productId ?? "" }));
 }
 
-/** Attended visits that stand on no invoice, oldest first, each with the price that held on its day. */
+/**
+ * Attended visits that stand on no invoice, oldest first, each with the price that held on its day.
+ * @param most how many at most; null for every one
+ */
 export async function visitsToInvoice(
   ctx: Context,
   wish: { patientId?: string | undefined; siteId?: string | undefined },
+  most: number | null = mostVisits,
 ): Promise<VisitToInvoice[]> {
   const reach = sitesWith(ctx.roles, "billing.draft");
   if (reach !== "all" && reach.length === 0) return [];
-  const rows = await ctx.db
+  const query = ctx.db
     .select({
       appointmentId: appointments.id,
       startsAt: appointments.startsAt,
@@ -103,8 +112,8 @@ export async function visitsToInvoice(
         reach === "all" ? undefined : inArray(appointments.siteId, reach),
       ),
     )
-    .orderBy(asc(appointments.startsAt), asc(appointments.id), desc(patientPayers.createdAt))
-    .limit(mostVisits);
+    .orderBy(asc(appointments.startsAt), asc(appointments.id), desc(patientPayers.createdAt));
+  const rows = await (most === null ? query : query.limit(most));
   const list = await loadPrices(ctx);
   const seen = new Set<string>();
   return rows.flatMap((row) => {

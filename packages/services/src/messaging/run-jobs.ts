@@ -1,19 +1,16 @@
+import { isAppError } from "@withy/core/errors";
 import { jobs } from "@withy/db/schema";
 import { and, asc, eq, lt, lte } from "drizzle-orm";
 import type { SystemContext } from "../context";
 import { inTransaction } from "../transaction";
+import { heldBy, type JobHandler, JobLost, JobPaused, type JobRow, jobRun } from "./job-run";
 import { claimsLostBefore, nextTry } from "./retry-schedule";
 
-export type JobRow = typeof jobs.$inferSelect;
+/** Someone waits for it: better to say soon that it failed than to try for a day. */
+const triesForAPerson = 3;
 
-export interface JobRun {
-  readonly row: JobRow;
-  /** Tells how far the work is; also keeps the claim alive. */
-  progress(done: number, total: number): Promise<void>;
-}
-
-/** Does one kind of job. It may run twice for one row, so a repeat must do no harm. */
-export type JobHandler = (ctx: SystemContext, run: JobRun) => Promise<void>;
+const fault =
+  "Something went wrong on our side. What was done so far stands; start it again for the rest, and if it fails again, tell whoever runs Withy for you.";
 
 async function claimJob(ctx: SystemContext, workerId: string): Promise<JobRow | null> {
   return inTransaction(ctx, async (tx) => {
@@ -39,46 +36,48 @@ async function claimJob(ctx: SystemContext, workerId: string): Promise<JobRow | 
 
 function settlement(row: JobRow, error: unknown, now: Date): Partial<JobRow> {
   const free = { claimedAt: null, claimedBy: null };
-  if (error === null) return { ...free, state: "done", finishedAt: now, lastError: null };
+  const ended = { ...free, finishedAt: now, liveKey: null };
+  if (error === null) return { ...ended, state: "done", lastError: null };
+  if (error instanceof JobPaused)
+    return { ...free, state: "waiting", dueAt: now, attempts: row.attempts - 1 };
   const lastError = error instanceof Error ? error.name : "unknown";
-  const dueAt = nextTry(row.attempts, now);
+  // An expected refusal stays one however often it is tried, and its sentence says what to do.
+  if (isAppError(error)) return { ...ended, state: "failed", lastError, problem: error.message };
+  const isGivenUp = row.requestedBy !== null && row.attempts >= triesForAPerson;
+  const dueAt = isGivenUp ? null : nextTry(row.attempts, now);
   return dueAt === null
-    ? { ...free, state: "failed", finishedAt: now, lastError }
+    ? { ...ended, state: "failed", lastError, problem: fault }
     : { ...free, state: "waiting", dueAt, lastError };
 }
 
+export interface JobRound {
+  readonly workerId: string;
+  readonly handlers: Readonly<Record<string, JobHandler>>;
+  /** Raised where the worker is asked to stop. */
+  readonly signal?: AbortSignal;
+  /** Told of bugs, without personal data. */
+  readonly onFault?: (fault: { jobId: string; kind: string; error: unknown }) => void;
+}
+
 /** Runs one due job, if there is one. @returns whether there was */
-export async function runNextJob(
-  ctx: SystemContext,
-  options: {
-    readonly workerId: string;
-    readonly handlers: Readonly<Record<string, JobHandler>>;
-    readonly onFault?: (fault: { jobId: string; kind: string; error: unknown }) => void;
-  },
-): Promise<boolean> {
+export async function runNextJob(ctx: SystemContext, round: JobRound): Promise<boolean> {
   const lost = and(eq(jobs.state, "claimed"), lt(jobs.claimedAt, claimsLostBefore(ctx.clock.now())));
   await ctx.db.update(jobs).set({ state: "waiting", claimedAt: null, claimedBy: null }).where(lost);
-  const row = await claimJob(ctx, options.workerId);
+  const row = await claimJob(ctx, round.workerId);
   if (!row) return false;
-  const mine = and(eq(jobs.id, row.id), eq(jobs.state, "claimed"), eq(jobs.claimedBy, options.workerId));
-  const progress = async (done: number, total: number) => {
-    await ctx.db
-      .update(jobs)
-      .set({ progressDone: done, progressTotal: total, claimedAt: ctx.clock.now() })
-      .where(mine);
-  };
   let failure: unknown = null;
   try {
-    const handler = options.handlers[row.kind];
+    const handler = round.handlers[row.kind];
     if (!handler) throw new Error(`No handler for jobs of kind ${row.kind}`);
-    await handler(ctx, { row, progress });
+    await handler(ctx, jobRun(ctx, row, round.workerId, round.signal));
   } catch (error) {
     failure = error ?? new Error("unknown");
-    options.onFault?.({ jobId: row.id, kind: row.kind, error });
+    const isExpected = isAppError(error) || error instanceof JobLost || error instanceof JobPaused;
+    if (!isExpected) round.onFault?.({ jobId: row.id, kind: row.kind, error });
   }
   await ctx.db
     .update(jobs)
     .set(settlement(row, failure, ctx.clock.now()))
-    .where(mine);
+    .where(heldBy(row, round.workerId));
   return true;
 }

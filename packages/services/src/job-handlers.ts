@@ -1,0 +1,7 @@
+import { draftVisitsJob, draftVisitsKind } from "./billing/draft-visits-job";
+import type { JobHandler } from "./messaging/job-run";
+
+/** Every kind of long work, by its name; the worker runs these. */
+export const jobHandlers: Readonly<Record<string, JobHandler>> = {
+  [draftVisitsKind]: draftVisitsJob,
+};
