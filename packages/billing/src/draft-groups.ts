@@ -1,3 +1,6 @@
+/** The most visits that one request drafts; where more wait, drafting is a job with progress. */
+export const mostVisitsAtOnce = 100;
+
 /** What decides on which draft a visit goes. */
 export interface DraftGroupKey {
   readonly patientId: string;

@@ -1,4 +1,4 @@
-import { mostVisitsAtOnce } from "@withy/contracts/billing";
+import { mostVisitsAtOnce } from "@withy/billing/draft-groups";
 import { newId } from "@withy/core/ids";
 import { auditEvents, invoiceLines, staffMembers } from "@withy/db/schema";
 import { draftInvoicesFromVisits, getDraftingJob, listToIssue, startDrafting } from "@withy/services/billing";

@@ -1,8 +1,20 @@
+import { refused } from "@withy/core/errors";
 import { newId } from "@withy/core/ids";
+import { refusal } from "@withy/core/refusal";
 import { diaryClaims, jobs } from "@withy/db/schema";
-import { beatHeart, checkHealth, pruneOldClaims, runNextJob, stopHeart } from "@withy/services/messaging";
+import { recordAudit } from "@withy/services/audit";
+import {
+  beatHeart,
+  checkHealth,
+  type JobHandler,
+  pruneOldClaims,
+  runNextJob,
+  stopHeart,
+} from "@withy/services/messaging";
+import { inTransaction } from "@withy/services/transaction";
 import { and, eq } from "drizzle-orm";
 import { beforeAll, describe, expect, it } from "vitest";
+import { auditOf } from "../../support/audit-rows";
 import { systemContextFor } from "../../support/contexts";
 import { buildPractice, type TestPractice } from "../../support/practice";
 import { enqueueBooking } from "./outbox-support";
@@ -12,12 +24,11 @@ beforeAll(async () => {
   practice = await buildPractice();
 });
 
-async function addJob(kind: string): Promise<string> {
+async function addJob(kind: string, values: Partial<typeof jobs.$inferInsert> = {}): Promise<string> {
   const id = newId();
   const now = practice.clock.now();
-  await practice.db
-    .insert(jobs)
-    .values({ id, practiceId: practice.practiceId, kind, input: { n: 3 }, dueAt: now, createdAt: now });
+  const job = { id, practiceId: practice.practiceId, kind, input: { n: 3 }, dueAt: now, createdAt: now };
+  await practice.db.insert(jobs).values({ ...job, ...values });
   return id;
 }
 async function jobRow(id: string) {
@@ -79,6 +90,71 @@ describe("jobs", () => {
       await runNextJob(systemContextFor(practice), { workerId: "w2", handlers: { hang: async () => {} } }),
     ).toBe(true);
     expect(await jobRow(id)).toMatchObject({ state: "done", attempts: 2 });
+  });
+});
+
+describe("a job that a person waits for", () => {
+  const askedFor = () => ({ requestedBy: practice.staff.accounts.id, liveKey: newId() });
+  const runWith = (kind: string, handler: JobHandler, more: Partial<Parameters<typeof runNextJob>[1]> = {}) =>
+    runNextJob(systemContextFor(practice), { workerId: "w1", handlers: { [kind]: handler }, ...more });
+
+  it("fails at once on a refusal, with its sentence, and is no fault", async () => {
+    const id = await addJob("refuse", askedFor());
+    const faults: unknown[] = [];
+    const refuse = async () => {
+      throw refused(refusal("too-late", "The month is closed. Choose another."));
+    };
+    await runWith("refuse", refuse, { onFault: (fault) => faults.push(fault) });
+    const failed = { state: "failed", attempts: 1, problem: "The month is closed. Choose another." };
+    expect(await jobRow(id)).toMatchObject({ ...failed, liveKey: null });
+    expect(faults).toEqual([]);
+  });
+
+  it("is given up after three tries, and says what to do", async () => {
+    const id = await addJob("stumble", askedFor());
+    const stumble = async () => {
+      throw new TypeError("secret detail");
+    };
+    for (let tries = 0; tries < 6; tries += 1) {
+      await runWith("stumble", stumble);
+      practice.clock.advance(20);
+    }
+    const row = await jobRow(id);
+    expect(row).toMatchObject({ state: "failed", attempts: 3, liveKey: null });
+    expect(row?.problem).toMatch(/start it again/);
+    expect(row?.problem).not.toContain("secret");
+  });
+
+  it("goes back to the queue where its worker is asked to stop, and the try does not count", async () => {
+    const id = await addJob("long", askedFor());
+    const control = new AbortController();
+    const long: JobHandler = async (_, run) => {
+      await run.progress(1, 2, { result: { made: 1 } });
+      run.pauseIfAsked();
+      control.abort();
+      run.pauseIfAsked();
+    };
+    await runWith("long", long, { signal: control.signal });
+    expect(await jobRow(id)).toMatchObject({ state: "waiting", attempts: 0, result: { made: 1 } });
+    await runWith("long", async (_, run) => run.progress(2, 2));
+    expect(await jobRow(id)).toMatchObject({ state: "done", attempts: 1, result: { made: 1 } });
+  });
+
+  it("takes its last part back where another worker holds it by now", async () => {
+    const id = await addJob("slow", askedFor());
+    const about = newId();
+    const slow: JobHandler = async (ctx, run) => {
+      await practice.db.update(jobs).set({ claimedBy: "w2" }).where(eq(jobs.id, id));
+      await inTransaction(ctx, async (tx) => {
+        const actor = { ...tx, practiceId: practice.practiceId };
+        await recordAudit(actor, { action: "trial.made", subjectKind: "trial", subjectId: about });
+        await run.progress(1, 1, { within: tx });
+      });
+    };
+    await runWith("slow", slow);
+    expect(await jobRow(id)).toMatchObject({ state: "claimed", claimedBy: "w2", progressDone: 0 });
+    expect(await auditOf(practice, about)).toEqual([]);
+    await practice.db.update(jobs).set({ state: "done" }).where(eq(jobs.id, id));
   });
 });
 

@@ -5,9 +5,6 @@ import { z } from "zod";
 import { idField, requiredText, versionField } from "../fields";
 import type { JobView } from "../jobs";
 
-/** The most visits that one request drafts; where more wait, drafting is a job (`startDrafting`). */
-export const mostVisitsAtOnce = 100;
-
 export const draftInvoicesInput = z.strictObject({
   /** One patient's visits only; left out, the attended visits that the person may bill. */
   patientId: idField.optional(),

@@ -1,4 +1,5 @@
-import { type DraftedView, draftInvoicesInput, mostVisitsAtOnce } from "@withy/contracts/billing";
+import { mostVisitsAtOnce } from "@withy/billing/draft-groups";
+import { type DraftedView, draftInvoicesInput } from "@withy/contracts/billing";
 import { verb } from "../verb";
 import { draftVisits } from "./draft-visits";
 import { hasPrice, visitsToInvoice } from "./visits-to-invoice";

@@ -2,6 +2,7 @@ import type {
   AgedDebtView,
   CardPaymentView,
   DraftedView,
+  DraftingJobView,
   editDraftInput,
   InvoiceListView,
   InvoiceView,
@@ -44,6 +45,12 @@ export const fetchProducts = (id: string, signal?: AbortSignal) =>
 
 export const draftVisits = (wish: { patientId?: string }) =>
   write<DraftedView>("POST", "/api/billing/drafts", wish);
+
+/** For more visits than one request may draft: the worker does it, and tells how far it is. */
+export const startDrafting = () => write<DraftingJobView>("POST", "/api/billing/drafting");
+
+export const fetchDrafting = (jobId: string, signal?: AbortSignal) =>
+  get<DraftingJobView>(`/api/billing/drafting/${jobId}`, {}, signal);
 
 export const editDraft = ({ invoiceId, ...input }: EditDraft) =>
   write<InvoiceView>("PUT", invoice(invoiceId), input);

@@ -6,6 +6,7 @@ export const billingKeys = {
   invoices: (filters: InvoiceFilters) => ["billing", "invoices", filters] as const,
   agedDebt: (siteId: string | undefined) => ["billing", "aged-debt", siteId] as const,
   toIssue: ["billing", "to-issue"] as const,
+  drafting: (jobId: string | undefined) => ["billing", "drafting", jobId] as const,
   invoice: (id: string) => ["billing", "invoice", id] as const,
   products: (id: string) => ["billing", "products", id] as const,
 };

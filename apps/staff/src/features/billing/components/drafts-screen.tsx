@@ -21,7 +21,7 @@ interface DraftsScreenProps {
 
 /** From attended visits to drafts, from drafts to invoices. */
 export function DraftsScreen({ first, today, may }: DraftsScreenProps) {
-  const { drafts, draftsTotalPence, visits, visitsTotalPence, areMoreVisits } = useToIssue(first);
+  const { drafts, draftsTotalPence, visits, visitsTotalPence, areMoreVisits, drafting } = useToIssue(first);
   const [chosenIds, setChosenIds] = useState<readonly string[]>([]);
   const issue = useIssueMany();
   const chosen = drafts.filter((d) => chosenIds.includes(d.id));
@@ -82,6 +82,7 @@ export function DraftsScreen({ first, today, may }: DraftsScreenProps) {
         visits={visits}
         totalPence={visitsTotalPence}
         areMore={areMoreVisits}
+        drafting={drafting}
         today={today}
         mayDraft={may.draft}
       />

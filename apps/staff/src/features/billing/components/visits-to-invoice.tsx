@@ -1,5 +1,5 @@
 "use client";
-import type { VisitToInvoiceView } from "@withy/contracts/billing";
+import type { DraftingJobView, VisitToInvoiceView } from "@withy/contracts/billing";
 import { shortDate } from "@withy/core/date-words";
 import { formatMoney, type Pence } from "@withy/core/money";
 import { AlertLine } from "@withy/ui/alert-line";
@@ -7,21 +7,28 @@ import { Button } from "@withy/ui/button";
 import { Line } from "@withy/ui/line";
 import { SectionHead } from "@withy/ui/section-head";
 import Link from "next/link";
-import { useDraftVisits } from "../hooks/use-to-issue";
+import { useDrafting } from "../hooks/use-drafting";
 
 interface VisitsToInvoiceProps {
   visits: readonly VisitToInvoiceView[];
   totalPence: Pence;
   areMore: boolean;
+  /** What this person started earlier and is not finished yet. */
+  drafting: DraftingJobView | null;
   today: string;
   mayDraft: boolean;
 }
 
 const mostShown = 40;
 
+/** "Drafting: 240 of 629 visits". */
+const draftingWords = ({ progressDone, progressTotal }: DraftingJobView): string =>
+  progressTotal === 0 ? "Drafting begins" : `Drafting: ${progressDone} of ${progressTotal} visits`;
+
 /** Attended visits that stand on no invoice, oldest first; one press puts those with a price on drafts. */
-export function VisitsToInvoice({ visits, totalPence, areMore, today, mayDraft }: VisitsToInvoiceProps) {
-  const draft = useDraftVisits();
+export function VisitsToInvoice(props: VisitsToInvoiceProps) {
+  const { visits, totalPence, areMore, drafting, today, mayDraft } = props;
+  const draft = useDrafting(drafting);
   const unpriced = visits.filter((v) => v.pricePence === null).length;
   const priced = visits.length - unpriced;
   return (
@@ -34,13 +41,16 @@ export function VisitsToInvoice({ visits, totalPence, areMore, today, mayDraft }
           action={
             mayDraft &&
             priced > 0 && (
-              <Button busy={draft.isPending} onClick={() => draft.mutate({})}>
+              <Button busy={draft.isBusy} onClick={() => draft.run(areMore ? null : priced)}>
                 Draft {priced} {priced === 1 ? "visit" : "visits"}
               </Button>
             )
           }
         />
-        {draft.error && <AlertLine tone="danger">{draft.error.message}</AlertLine>}
+        <div aria-live="polite" className="soft small num">
+          {draft.progress && draftingWords(draft.progress)}
+        </div>
+        {draft.problem !== null && <AlertLine tone="danger">{draft.problem}</AlertLine>}
         {unpriced > 0 && (
           <AlertLine>
             {unpriced === 1 ? "One visit has" : `${unpriced} visits have`} no price on the list for their day.
