@@ -12,7 +12,7 @@ export interface Connection {
 }
 
 /**
- * Opens a pool in UTC with exact big integers. No relations schema is given, so the relational query interface,
+ * Opens a pool in UTC and READ COMMITTED with exact big integers. No relations schema is given, so the relational query interface,
  * which MariaDB cannot run, is out of reach.
  */
 export function connect(url: string, options: { connectionLimit?: number } = {}): Connection {
@@ -25,7 +25,7 @@ export function connect(url: string, options: { connectionLimit?: number } = {})
     enableKeepAlive: true,
   });
   pool.pool.on("connection", (connection) => {
-    connection.query("set session time_zone = '+00:00'");
+    connection.query("set session time_zone = '+00:00', tx_isolation = 'READ-COMMITTED'");
   });
   return { db: openDatabase(pool), pool, close: () => pool.end() };
 }

@@ -6,16 +6,14 @@ const lockWait = 1205;
 const tries = 5;
 
 /**
- * Runs the work in one READ COMMITTED transaction. A deadlock or a lock wait rolls back and runs the whole
+ * Runs the work in one transaction, READ COMMITTED as the pool's sessions are. A deadlock or a lock wait rolls back and runs the whole
  * function again, up to five times with jitter: MariaDB answers either for unrelated bookings too, and a cluster
  * answers a conflict as a deadlock at commit.
  */
 export async function runInTransaction<T>(db: Database, work: (tx: Database) => Promise<T>): Promise<T> {
   for (let attempt = 1; ; attempt += 1) {
     try {
-      return await db.transaction((tx) => work(tx as unknown as Database), {
-        isolationLevel: "read committed",
-      });
+      return await db.transaction((tx) => work(tx as unknown as Database));
     } catch (error) {
       const isPassing = error instanceof DatabaseError && [deadlock, lockWait].includes(error.errno);
       if (!isPassing || attempt === tries) throw error;

@@ -1,5 +1,4 @@
 import { AppError } from "@withy/core/errors";
-import { isDuplicate } from "@withy/db/database-error";
 import { idempotencyKeys } from "@withy/db/schema";
 import { and, eq } from "drizzle-orm";
 import type { Context } from "./context";
@@ -7,13 +6,12 @@ import { inTransaction } from "./transaction";
 
 /**
  * Runs a write in one transaction at most once for the browser's idempotency key: a repeat gets the first answer
- * again. Without a key it simply runs. The answer must be plain JSON.
+ * again. The work runs before the key is looked for, so that a first request, which nearly all are, does not pay
+ * for it; a repeat is rolled back. Without a key it simply runs. The answer must be plain JSON.
  */
 export async function once<T>(ctx: Context, name: string, work: (ctx: Context) => Promise<T>): Promise<T> {
   const key = ctx.idempotencyKey;
   if (key === null) return inTransaction(ctx, work);
-  const earlier = await findAnswer<T>(ctx, key, name);
-  if (earlier) return earlier.answer;
   try {
     return await inTransaction(ctx, async (tx) => {
       const answer = await work(tx);
@@ -28,8 +26,7 @@ export async function once<T>(ctx: Context, name: string, work: (ctx: Context) =
       return answer;
     });
   } catch (error) {
-    // The same request was running twice: the other one committed first.
-    if (!isDuplicate(error, "PRIMARY")) throw error;
+    // A repeat fails on the key at the latest, often sooner on what the first one did: both mean its answer.
     const first = await findAnswer<T>(ctx, key, name);
     if (!first) throw error;
     return first.answer;

@@ -86,7 +86,11 @@ export function appointmentView(ctx: Context, row: VisitRow, around: Surrounding
 
 /** The visit as this person may see it, or not-found. */
 export async function readAppointment(ctx: Context, appointmentId: string): Promise<AppointmentView> {
-  const row = await readVisitRow(ctx, appointmentId);
+  return viewVisit(ctx, await readVisitRow(ctx, appointmentId));
+}
+
+/** A visit just read, as this person may see it. */
+export async function viewVisit(ctx: Context, row: VisitRow): Promise<AppointmentView> {
   requireReach(ctx, "diary.read", row.site_id, "appointment");
   return appointmentView(ctx, row, await readSurroundings(ctx, row));
 }

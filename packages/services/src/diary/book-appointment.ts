@@ -6,11 +6,12 @@ import type { Context } from "../context";
 import { once } from "../once";
 import { requireReach } from "../reach";
 import { verb } from "../verb";
-import { readAppointment } from "./appointment-view";
+import { readAppointment, viewVisit } from "./appointment-view";
 import type { AppointmentRow } from "./change-appointment";
 import { claimPlan, planVisit, type VisitPlan } from "./plan-visit";
 import { recordChange } from "./record-change";
 import { sendVisitMessage } from "./send-visit-message";
+import type { VisitRow } from "./visit-row";
 
 type Input = z.output<typeof bookAppointmentInput>;
 
@@ -44,15 +45,18 @@ export const bookAppointment = verb(
     requireReach(ctx, "diary.book", input.siteId, "site");
     const { startsAt, durationMinutes, overrideReason } = input;
     const wish = { startsAt, durationMinutes, cleanDownMinutes: null, overrideReason, movingId: null };
+    const written: VisitRow[] = [];
     const { appointmentId } = await once(ctx, "appointment.book", async (tx) => {
       const plan = await planVisit(tx, input, wish);
       const row = newRow(tx, input, plan);
       await tx.db.insert(appointments).values(row);
       await claimPlan(tx, row.id, plan);
       await recordChange(tx, "booked", null, row);
-      await sendVisitMessage(tx, "booking-confirmed", row.id);
+      written.push(await sendVisitMessage(tx, "booking-confirmed", row.id));
       return { appointmentId: row.id };
     });
-    return readAppointment(ctx, appointmentId);
+    // A repeat's own rows were rolled back: the visit is the first one's.
+    const row = written.find(({ id }) => id === appointmentId);
+    return row ? viewVisit(ctx, row) : readAppointment(ctx, appointmentId);
   },
 );

@@ -11,31 +11,34 @@ export interface ChosenRoom {
   readonly kind: string;
 }
 
+/** A visit and its clean-down, in search of a room. */
+export interface RoomWish {
+  readonly therapistId: string;
+  readonly kind: string;
+  readonly startsAt: Date;
+  readonly until: Date;
+  readonly movingId: string | null;
+}
+
 /**
- * The first room of the kind, in the site's own order, that is free for the whole of a visit and its clean-down.
+ * The first room of the kind, in the site's own order, that is free for the whole of a visit and its clean-down; and
+ * whether the therapist is, which the same look at the claims tells.
  * @throws refused `no-room` where none is
  */
 export async function chooseRoom(
   ctx: Context,
   days: TherapistDays,
-  kind: string,
-  startsAt: Date,
-  until: Date,
-  movingId: string | null,
-): Promise<ChosenRoom> {
+  wish: RoomWish,
+): Promise<{ room: ChosenRoom; isTherapistFree: boolean }> {
+  const { therapistId, kind, startsAt, until, movingId } = wish;
   const rooms = days.frame.rooms.filter((r) => r.kind === kind);
-  const claimed = await readClaimed(
-    ctx,
-    rooms.map((r) => r.id),
-    startsAt,
-    until,
-    movingId,
-  );
+  const claimed = await readClaimed(ctx, [therapistId, ...rooms.map((r) => r.id)], startsAt, until, movingId);
   const visit = { from: startsAt.getTime(), to: until.getTime() };
   const blocked = (id: string): boolean =>
     days.frame.absences.some((a) => a.roomId === id && overlaps(a, visit));
-  const free = rooms.find((r) => (claimed.get(r.id) ?? []).length === 0 && !blocked(r.id));
-  if (free) return free;
+  const isUnclaimed = (id: string): boolean => (claimed.get(id) ?? []).length === 0;
+  const room = rooms.find((r) => isUnclaimed(r.id) && !blocked(r.id));
+  if (room) return { room, isTherapistFree: isUnclaimed(therapistId) };
   const message =
     rooms.length === 0
       ? `${days.site.name} has no room of the kind that this service needs. Choose another site.`

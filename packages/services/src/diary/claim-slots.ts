@@ -28,12 +28,10 @@ export async function findHolder(ctx: Context, claim: Claim): Promise<string | n
 }
 
 /**
- * Takes the slots for the visit. The primary key of the claims decides every race; the look beforehand only spares
- * a plain "taken" the locks of a failed insert.
+ * Takes the slots for the visit. The primary key of the claims decides every race.
  * @returns whether they are now this visit's
  */
 export async function claimSlots(ctx: Context, claim: Claim): Promise<boolean> {
-  if ((await findHolder(ctx, claim)) !== null) return false;
   // One order of resources for everyone, so that two claims on the same pair cannot wait for each other.
   const resources = [claim.therapistId, claim.roomId].sort();
   const slots = slotsOf(claim.startsAt, claim.until);

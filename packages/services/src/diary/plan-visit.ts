@@ -4,7 +4,7 @@ import { checkBooking, readStart } from "@withy/diary/check-booking";
 import type { Context } from "../context";
 import { type BookingIds, type BookingSetting, loadBookingSetting } from "./booking-setting";
 import { type ChosenRoom, chooseRoom } from "./choose-room";
-import { claimSlots } from "./claim-slots";
+import { claimSlots, findHolder } from "./claim-slots";
 import { slotTaken } from "./slot-taken";
 import { readTherapistDays } from "./therapist-day";
 
@@ -28,6 +28,8 @@ export interface VisitPlan {
   readonly startsAt: Date;
   readonly endsAt: Date;
   readonly cleanDownMinutes: number;
+  /** What a look at the claims said of the whole of it; null where nobody looked yet. */
+  readonly isFree: boolean | null;
 }
 
 /**
@@ -63,12 +65,13 @@ export async function planVisit(ctx: Context, ids: BookingIds, wish: PlanWish): 
   const endsAt = addMinutes(startsAt, durationMinutes);
   if (setting.room) {
     check(setting.room);
-    return { setting, room: setting.room, startsAt, endsAt, cleanDownMinutes };
+    return { setting, room: setting.room, startsAt, endsAt, cleanDownMinutes, isFree: null };
   }
   check({ name: "any room", siteId: site.id, kind: service.roomKind });
   const until = addMinutes(endsAt, cleanDownMinutes);
-  const room = await chooseRoom(ctx, days, service.roomKind, startsAt, until, wish.movingId);
-  return { setting, room, startsAt, endsAt, cleanDownMinutes };
+  const roomWish = { therapistId: therapist.id, kind: service.roomKind, startsAt, until };
+  const found = await chooseRoom(ctx, days, { ...roomWish, movingId: wish.movingId });
+  return { setting, room: found.room, startsAt, endsAt, cleanDownMinutes, isFree: found.isTherapistFree };
 }
 
 /** Takes the plan's time for the visit. @throws refused `slot-taken` where someone else has any of it */
@@ -76,7 +79,9 @@ export async function claimPlan(ctx: Context, appointmentId: string, plan: Visit
   const { setting, room, startsAt, endsAt, cleanDownMinutes } = plan;
   const until = addMinutes(endsAt, cleanDownMinutes);
   const claim = { appointmentId, therapistId: setting.therapist.id, roomId: room.id, startsAt, until };
-  if (await claimSlots(ctx, claim)) return;
+  // The look beforehand only spares a plain "taken" the locks of a failed insert.
+  const isFree = plan.isFree ?? (await findHolder(ctx, claim)) === null;
+  if (isFree && (await claimSlots(ctx, claim))) return;
   const durationMinutes = minutesBetween(startsAt, endsAt);
   const roomKind = setting.service.roomKind;
   throw await slotTaken(ctx, { ...claim, site: setting.site, roomKind, durationMinutes, cleanDownMinutes });

@@ -40,16 +40,17 @@ function payloadOf(
 /**
  * Puts an e-mail with its calendar file into the outbox, in the caller's transaction. Nothing is sent without an
  * address, nor about a visit that has begun: whoever walks in needs no invitation.
+ * @returns the visit as it now stands, for the answer
  */
 export async function sendVisitMessage(
   ctx: Context,
   template: AppointmentTemplate,
   appointmentId: string,
   previousStartsAt: Date | null = null,
-): Promise<void> {
+): Promise<VisitRow> {
   const row = await readVisitRow(ctx, appointmentId);
   const { email } = row;
-  if (email === null || email === "" || utc(row.starts_at) <= ctx.clock.now().getTime()) return;
+  if (email === null || email === "" || utc(row.starts_at) <= ctx.clock.now().getTime()) return row;
   await enqueueMessage(ctx, {
     template,
     toAddress: email,
@@ -59,4 +60,5 @@ export async function sendVisitMessage(
     patientId: row.patient_id,
     dedupeKey: `${template}/${row.id}/${row.version}`,
   });
+  return row;
 }

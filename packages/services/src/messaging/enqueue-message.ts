@@ -1,6 +1,7 @@
 import { newId } from "@withy/core/ids";
+import { isDuplicate } from "@withy/db/database-error";
 import { outboxMessages } from "@withy/db/schema";
-import { sql } from "drizzle-orm";
+import { and, eq } from "drizzle-orm";
 import type { SystemContext } from "../context";
 
 export interface OutgoingMessage {
@@ -24,29 +25,22 @@ export async function enqueueMessage(
 ): Promise<string> {
   const now = ctx.clock.now();
   const id = newId();
-  await ctx.db
-    .insert(outboxMessages)
-    .values({
-      id,
-      practiceId: ctx.practiceId,
-      channel: "email",
-      template: message.template,
-      toAddress: message.toAddress,
-      payload: message.payload,
-      aboutKind: message.aboutKind,
-      aboutId: message.aboutId,
-      patientId: message.patientId ?? null,
-      dedupeKey: message.dedupeKey,
-      dueAt: message.dueAt ?? now,
-      createdAt: now,
-    })
-    .onDuplicateKeyUpdate({ set: { dedupeKey: sql`dedupe_key` } });
-  const [row] = await ctx.db
-    .select({ id: outboxMessages.id })
-    .from(outboxMessages)
-    .where(
-      sql`${outboxMessages.practiceId} = ${ctx.practiceId} and ${outboxMessages.dedupeKey} = ${message.dedupeKey}`,
-    )
-    .limit(1);
-  return row?.id ?? id;
+  const { template, toAddress, payload, aboutKind, aboutId, patientId = null, dedupeKey } = message;
+  const row = { template, toAddress, payload, aboutKind, aboutId, patientId, dedupeKey };
+  const dueAt = message.dueAt ?? now;
+  try {
+    await ctx.db
+      .insert(outboxMessages)
+      .values({ id, practiceId: ctx.practiceId, channel: "email", ...row, dueAt, createdAt: now });
+    return id;
+  } catch (error) {
+    if (!isDuplicate(error, "outbox_messages_once")) throw error;
+    const [earlier] = await ctx.db
+      .select({ id: outboxMessages.id })
+      .from(outboxMessages)
+      .where(and(eq(outboxMessages.practiceId, ctx.practiceId), eq(outboxMessages.dedupeKey, dedupeKey)))
+      .limit(1);
+    if (!earlier) throw error;
+    return earlier.id;
+  }
 }
