@@ -24,15 +24,13 @@ beforeEach(() => practice.clock.set(testNow));
 
 const therapist = () => contextFor(practice, "therapist");
 
-/** The server's own error number, which is under the query library's error. */
+/** The server's own error number. */
 async function errnoOf(work: Promise<unknown>): Promise<number | null> {
   try {
     await work;
     return null;
   } catch (error) {
-    const cause =
-      (error as { cause?: { errno?: number }; errno?: number }).cause ?? (error as { errno?: number });
-    return cause.errno ?? null;
+    return (error as { errno?: number }).errno ?? null;
   }
 }
 

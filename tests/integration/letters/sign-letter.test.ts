@@ -120,7 +120,7 @@ describe("a signed letter", () => {
       .update(letters)
       .set({ datedOn: "2020-01-01" })
       .where(and(eq(letters.practiceId, practice.practiceId), eq(letters.id, letter.id)));
-    await expect(change).rejects.toMatchObject({ cause: { errno: 1644 } });
+    await expect(change).rejects.toMatchObject({ errno: 1644 });
     await asDatabaseOwner(async (owner) => {
       await expect(
         owner.query("update letters set sections = '[]' where id = ?", [letter.id]),
