@@ -73,16 +73,25 @@ export async function signAndSend(page: Page, { name, gp }: Treated): Promise<vo
   await expectPdf(page, (await way.getByRole("link", { name: "PDF" }).getAttribute("href")) ?? "");
 }
 
-/** The doctor's mail holds no clinical word, only a private page that opens the letter. */
+/**
+ * The doctor's mail holds no clinical word and no date of birth, only a private page that asks for it, refuses another
+ * and opens the letter.
+ */
 export async function readAsDoctor(page: Page, letterId: string, patient: Treated): Promise<void> {
   const letter = await read<LetterView>(page, `/api/letters/${letterId}`);
   const mail = await waitForMail(patient.gp.email, new RegExp(letter.reference), 60_000);
   expect(mail.text).not.toContain(patient.familyName);
   expect(mail.text).not.toContain("kneecap");
+  expect(mail.text).not.toContain("1971");
   expect(mail.attachments).toEqual([]);
   const link = /https?:\/\/\S+\/link\/\S+\/letter/.exec(mail.text)?.[0] ?? "";
   await page.goto(new URL(link).pathname);
   await expect(page.getByRole("heading", { level: 1 })).toHaveText("A letter from Marram Physiotherapy");
+  await giveDate(page, "18 5 1971");
+  await expect(page.getByRole("link", { name: /born on another day/ })).toBeVisible({ timeout: 30_000 });
+  await expect(page.getByLabel("The patient's date of birth")).toHaveValue("18 5 1971");
+  await expect(page.getByRole("button", { name: "Open the letter" })).toHaveCount(0);
+  await giveDate(page, patient.bornOn);
   const opened = page.context().waitForEvent("response", {
     predicate: (response) => response.url().endsWith("/letter/pdf"),
     timeout: 60_000,
@@ -94,6 +103,11 @@ export async function readAsDoctor(page: Page, letterId: string, patient: Treate
   for (const other of page.context().pages()) if (other !== page) await other.close();
   const after = await read<LetterView>(page, `/api/letters/${letterId}`);
   expect(after.deliveries.map((delivery) => delivery.firstOpenedAt)).not.toContain(null);
+}
+
+async function giveDate(page: Page, bornOn: string): Promise<void> {
+  await page.getByLabel("The patient's date of birth").fill(bornOn);
+  await page.getByRole("button", { name: "Go on to the letter" }).click();
 }
 
 export async function seeDischarged(page: Page, { id }: Treated, episodeId: string): Promise<void> {

@@ -12,6 +12,8 @@ export interface Treated {
   readonly givenName: string;
   readonly familyName: string;
   readonly name: string;
+  /** As the reader of a letter types it: day, month, year. */
+  readonly bornOn: string;
   readonly gp: { readonly name: string; readonly email: string };
 }
 
@@ -41,7 +43,8 @@ export async function registeredWithGp(page: Page): Promise<Treated> {
     }),
   );
   const gp = { name: gpName, email: surgery.email };
-  return { id: row.id, givenName, familyName, name: `${givenName} ${familyName}`, gp };
+  const name = `${givenName} ${familyName}`;
+  return { id: row.id, givenName, familyName, name, bornOn: "19 5 1971", gp };
 }
 
 const syllables = [

@@ -60,3 +60,7 @@ export function editOf(letter: LetterView, words: Record<string, string> = {}) {
     })),
   };
 }
+
+/** The secret of the private link in a message. */
+export const tokenIn = (text: string | undefined) =>
+  /\/link\/([A-Za-z0-9_-]{43})\/letter/.exec(text ?? "")?.[1] ?? "";

@@ -1,7 +1,8 @@
 import { outcomes } from "@withy/clinical/episodes/states";
 import { z } from "zod";
 import { idField, optionalText, pageFields, requiredText, versionField } from "../fields";
-import { letterActors, letterSectionKeys, longestSentence } from "./content";
+import { longestSentence } from "./content";
+import { letterActors, letterSectionKeys } from "./headings";
 
 export const letterIdInput = z.strictObject({ letterId: idField });
 
@@ -88,6 +89,11 @@ export const listLettersInput = z.strictObject({
   ...pageFields,
 });
 export type ListLettersInput = z.input<typeof listLettersInput>;
+
+/** What the reader of a private link must know, as they typed it. */
+export const letterReaderInput = z.strictObject({
+  bornOn: requiredText(40, "Enter the patient's date of birth as day, month and year."),
+});
 
 /** The secret part of a private link: 32 random bytes in base64url. */
 export const letterTokenInput = z.strictObject({ token: z.string().regex(/^[A-Za-z0-9_-]{43}$/) });

@@ -25,11 +25,11 @@ export function letterWaiting({
     subject: `A letter from ${sender.practice}, reference ${reference}`,
     greeting: `Dear ${recipientName}`,
     paragraphs: [
-      "We have written to you about someone whom we share the care of. The letter is on a private page.",
+      "We have written to you about someone whom we share the care of. The letter is on a private page, which asks for that person's date of birth.",
     ],
     action: { label: "Read the letter", url },
     after: [
-      `The page stays open for ${validFor}; please file the letter before then. If the link does not work, ring us and give the reference ${reference}.`,
+      `The page stays open for ${validFor}; please file the letter before then. If the link does not work, or you cannot tell whom it is about, ring us and give the reference ${reference}.`,
     ],
     from: sender,
   });

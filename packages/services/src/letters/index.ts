@@ -1,7 +1,7 @@
 export { draftDischargeLetter } from "./draft-discharge-letter";
 export { getLetter } from "./get-letter";
 export { getLetterPdf } from "./get-letter-pdf";
-export { getLetterLink, openLinkedLetter } from "./letter-by-link";
+export { checkLetterReader, getLetterLink, type LetterReader, openLinkedLetter } from "./letter-by-link";
 export { listLetters } from "./list-letters";
 export type { RenderedLetter } from "./printed-letter";
 export { saveLetter } from "./save-letter";

@@ -1,4 +1,4 @@
-import { episodes, letterDeliveries, letters, patients, staffMembers } from "@withy/db/schema";
+import { episodes, letterDeliveries, letters, patients, practices, staffMembers } from "@withy/db/schema";
 import { type PrintedLetter, renderLetterPdf } from "@withy/documents/letter/letter-pdf";
 import { and, eq } from "drizzle-orm";
 import type { Context } from "../context";
@@ -49,15 +49,29 @@ export async function renderLetter(ctx: Reader, letter: LetterRow): Promise<Rend
   return { filename: `letter-${letter.reference}.pdf`, bytes };
 }
 
+export interface LinkedLetter {
+  readonly delivery: typeof letterDeliveries.$inferSelect;
+  readonly letter: LetterRow;
+  /** The practice's zone. */
+  readonly zone: string;
+  /** The patient's date of birth, which the reader must know. */
+  readonly bornOn: string;
+}
+
 /** The letter of a delivery whose link has not run out; null for any other. */
-export async function findLinkedLetter(ctx: Pick<Context, "db" | "clock">, tokenHash: string) {
+export async function findLinkedLetter(
+  ctx: Pick<Context, "db" | "clock">,
+  tokenHash: string,
+): Promise<LinkedLetter | null> {
   const [row] = await ctx.db
-    .select({ delivery: letterDeliveries, letter: letters })
+    .select({ delivery: letterDeliveries, letter: letters, zone: practices.zone, bornOn: patients.bornOn })
     .from(letterDeliveries)
     .innerJoin(
       letters,
       and(eq(letters.practiceId, letterDeliveries.practiceId), eq(letters.id, letterDeliveries.letterId)),
     )
+    .innerJoin(patients, and(eq(patients.practiceId, letters.practiceId), eq(patients.id, letters.patientId)))
+    .innerJoin(practices, eq(practices.id, letters.practiceId))
     .where(eq(letterDeliveries.tokenHash, tokenHash))
     .limit(1);
   if (!row?.delivery.expiresAt || row.delivery.expiresAt <= ctx.clock.now()) return null;

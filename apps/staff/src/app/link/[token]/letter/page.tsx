@@ -1,10 +1,10 @@
 import { plainDateWords } from "@withy/core/date-words";
 import { isAppError } from "@withy/core/errors";
 import { getLetterLink } from "@withy/services/letters";
-import { Button } from "@withy/ui/button";
 import type { Metadata } from "next";
 import { PlainPage } from "@/components/plain-page";
 import { systemContext } from "@/server/session";
+import { LetterReaderForm } from "./letter-reader-form";
 
 // The address is the secret: it must not be told to any other site.
 export const metadata: Metadata = { title: "A letter for you", referrer: "same-origin" };
@@ -19,8 +19,8 @@ async function findLink(token: string) {
 }
 
 /**
- * What a doctor's private link opens: who wrote, and a button. The letter itself comes only for the button, so that a
- * mail scanner that follows links neither reads it nor counts as its reader.
+ * What a doctor's private link opens: who wrote, and the question for the patient's date of birth. Nothing of the
+ * letter comes before the answer, so a mail scanner that follows links neither reads it nor counts as its reader.
  */
 export default async function LetterLinkPage({ params }: PageProps<"/link/[token]/letter">) {
   const { token } = await params;
@@ -37,16 +37,10 @@ export default async function LetterLinkPage({ params }: PageProps<"/link/[token
   }
   return (
     <PlainPage title={`A letter from ${link.practice}`} lead={`Reference ${link.reference}`}>
-      <form method="post" action={`/link/${token}/letter/pdf`} target="_blank" rel="noopener">
-        <p>
-          <Button kind="primary" size="wide" type="submit">
-            Open the letter
-          </Button>
-        </p>
-      </form>
+      <LetterReaderForm token={token} />
       <p>
         It opens as a PDF. This page works until {plainDateWords(link.expiresOn)}; please file the letter
-        before then.
+        before then. If you cannot tell whom it is about, ring us and give the reference.
       </p>
       <p className="soft">
         {link.contactLines.map((line) => (
