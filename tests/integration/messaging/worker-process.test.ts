@@ -3,13 +3,18 @@ import { once } from "node:events";
 import { createServer, type Server } from "node:net";
 import { fileURLToPath } from "node:url";
 import { systemClock } from "@withy/core/clock";
-import { outboxMessages, workerHeartbeats } from "@withy/db/schema";
+import { newId } from "@withy/core/ids";
+import { dayOf } from "@withy/core/zoned-time";
+import { outboxMessages, prices, workerHeartbeats } from "@withy/db/schema";
 import { startFakes } from "@withy/fakes/start-fakes";
+import { getDraftingJob, listToIssue, startDrafting } from "@withy/services/billing";
 import { drainOutbox } from "@withy/services/messaging";
 import { eq, like } from "drizzle-orm";
 import { afterEach, beforeAll, expect, it } from "vitest";
-import { systemContextFor } from "../../support/contexts";
+import { contextFor, systemContextFor } from "../../support/contexts";
+import { addPatient } from "../../support/people";
 import { buildPractice, type TestPractice } from "../../support/practice";
+import { attend } from "../billing/invoice-steps";
 import { enqueueReset, officeWith, outboxRow, recordingMail } from "./outbox-support";
 
 let practice: TestPractice;
@@ -86,4 +91,26 @@ it("delivers what a killed worker had in hand, under the same Message-ID", async
   expect(code).toBe(0);
   expect(await heartsOf(second)).toEqual([]);
   await fakes.close();
+}, 90_000);
+
+it("does the jobs that were started, every kind that the house knows", async () => {
+  const { id: patientId } = await addPatient(practice);
+  // The worker goes by the machine's own clock, so the visit and its price do too.
+  const now = { clock: systemClock };
+  await attend(practice, patientId, dayOf(new Date(Date.now() - 2 * 86_400_000), practice.zone));
+  const serviceId = practice.services.followUp.id;
+  await practice.db.insert(prices).values({
+    ...{ practiceId: practice.practiceId, id: newId(), serviceId, siteId: practice.sites.saltgate.id },
+    ...{ amountPence: 5300, vatTreatment: "exempt", validFrom: "2020-01-01" },
+  });
+  const accounts = contextFor(practice, "accounts", now);
+  const { id: jobId } = await startDrafting(accounts, { patientId });
+  const worker = await startWorker(9);
+  await expect
+    .poll(() => getDraftingJob(accounts, { jobId }), { timeout: 20_000 })
+    .toMatchObject({ state: "done", progressDone: 1, progressTotal: 1, result: { visitsDrafted: 1 } });
+  const { drafts } = await listToIssue(accounts, { patientId });
+  expect(drafts).toMatchObject([{ visits: 1, totalPence: 5300 }]);
+  worker.kill("SIGTERM");
+  await once(worker, "exit");
 }, 90_000);
