@@ -1,5 +1,5 @@
 import { type Pence, sumPence } from "@withy/core/money";
-import { daysBetween, type PlainDateText } from "@withy/core/zoned-time";
+import { daysBetween, type PlainDateText } from "@withy/core/plain-date";
 
 export const ageBuckets = ["not-due", "0-30", "31-60", "61-90", "over-90"] as const;
 export type AgeBucket = (typeof ageBuckets)[number];

@@ -1,5 +1,5 @@
 import type { Pence } from "@withy/core/money";
-import type { PlainDateText } from "@withy/core/zoned-time";
+import type { PlainDateText } from "@withy/core/plain-date";
 
 export interface Debt {
   readonly id: string;

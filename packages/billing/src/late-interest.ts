@@ -1,6 +1,6 @@
 import { divideRounded, type Pence } from "@withy/core/money";
+import type { PlainDateText } from "@withy/core/plain-date";
 import { type Refusal, refusal } from "@withy/core/refusal";
-import type { PlainDateText } from "@withy/core/zoned-time";
 
 export type PayerKind = "patient" | "insurer" | "employer";
 

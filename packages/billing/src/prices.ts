@@ -1,5 +1,5 @@
 import type { Pence } from "@withy/core/money";
-import type { PlainDateText } from "@withy/core/zoned-time";
+import type { PlainDateText } from "@withy/core/plain-date";
 import type { VatTreatment } from "./vat";
 
 /** One row of the price list. A null site or payer means any. */

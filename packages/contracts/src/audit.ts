@@ -1,21 +1,7 @@
 import { z } from "zod";
+import { auditSubjects } from "./audit-subjects";
 import { idField, pageFields, plainDateField } from "./fields";
 import type { Page } from "./page";
-
-/** What an event may be about, as the browser's filter offers it. */
-export const auditSubjects = [
-  "patient",
-  "appointment",
-  "episode",
-  "note",
-  "measure-record",
-  "programme",
-  "letter",
-  "invoice",
-  "payment",
-  "session",
-  "staff-member",
-] as const;
 
 const blank = z.literal("").transform(() => undefined);
 

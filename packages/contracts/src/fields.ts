@@ -1,4 +1,4 @@
-import { isPlainDate } from "@withy/core/zoned-time";
+import { isPlainDate } from "@withy/core/plain-date";
 import { z } from "zod";
 
 /** Fields that many inputs share. The messages stand beside the field, so they say what to do. */

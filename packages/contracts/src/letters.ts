@@ -1,3 +1,4 @@
 export * from "./letters/content";
+export * from "./letters/headings";
 export * from "./letters/letter-input";
 export * from "./letters/letter-view";

@@ -1,26 +1,8 @@
 import { z } from "zod";
-import { type AppointmentTemplate, appointmentTemplates } from "./diary/message";
 import { idField, pageFields } from "./fields";
+import type { MessageState, MessageTemplate } from "./message-words";
 
-export const accountTemplates = ["password-reset", "staff-invitation"] as const;
-export type AccountTemplate = (typeof accountTemplates)[number];
-
-export type MessageTemplate = AppointmentTemplate | AccountTemplate | "letter-waiting";
-
-export const messageTemplates: readonly MessageTemplate[] = [
-  ...appointmentTemplates,
-  ...accountTemplates,
-  "letter-waiting",
-];
-
-export const messageTemplateWords: Record<MessageTemplate, string> = {
-  "booking-confirmed": "Appointment booked",
-  "booking-moved": "Appointment moved",
-  "booking-cancelled": "Appointment cancelled",
-  "password-reset": "New password",
-  "staff-invitation": "Invitation",
-  "letter-waiting": "Letter",
-};
+export * from "./message-words";
 
 /** A path of our own app; the worker puts the app's address before it. It carries a secret: cleared once sent. */
 const secretPath = z.string().regex(/^\/[A-Za-z0-9/_-]+(\?[A-Za-z0-9=&_-]+)?$/);
@@ -43,18 +25,6 @@ export const letterMessagePayload = z.strictObject({
   validFor: z.string(),
 });
 export type LetterMessagePayload = z.infer<typeof letterMessagePayload>;
-
-export const messageStates = ["waiting", "claimed", "sent", "failed", "dropped"] as const;
-export type MessageState = (typeof messageStates)[number];
-
-/** What is shown for each state; "claimed" lasts seconds and is told as waiting. */
-export const messageStateWords: Record<MessageState, string> = {
-  waiting: "Waiting to go",
-  claimed: "Waiting to go",
-  sent: "Sent",
-  failed: "Not sent",
-  dropped: "Not needed",
-};
 
 export const listMessagesInput = z.strictObject({
   state: z.enum(["all", "waiting", "sent", "failed"]).default("all"),

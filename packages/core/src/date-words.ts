@@ -1,5 +1,4 @@
-import { Temporal } from "temporal-polyfill";
-import type { PlainDateText } from "./zoned-time";
+import { addDays, addMonths, datePartsOf, type PlainDateText, plainDateOf, weekdayOf } from "./plain-date";
 
 const months = [
   "January",
@@ -21,33 +20,33 @@ const weekdayName = (n: number): string => weekdays[n - 1] ?? "";
 
 /** "Wednesday 6 May 2026": prose and letters. */
 export function longDate(day: PlainDateText): string {
-  const d = Temporal.PlainDate.from(day);
-  return `${weekdayName(d.dayOfWeek)} ${d.day} ${monthName(d.month)} ${d.year}`;
+  const d = datePartsOf(day);
+  return `${weekdayName(weekdayOf(day))} ${d.day} ${monthName(d.month)} ${d.year}`;
 }
 
 /** "Tuesday 1 December": a page's title. */
 export function titleDate(day: PlainDateText): string {
-  const d = Temporal.PlainDate.from(day);
-  return `${weekdayName(d.dayOfWeek)} ${d.day} ${monthName(d.month)}`;
+  const d = datePartsOf(day);
+  return `${weekdayName(weekdayOf(day))} ${d.day} ${monthName(d.month)}`;
 }
 
 /** "6 May 2026". */
 export function plainDateWords(day: PlainDateText): string {
-  const d = Temporal.PlainDate.from(day);
+  const d = datePartsOf(day);
   return `${d.day} ${monthName(d.month)} ${d.year}`;
 }
 
 /** "6 May" in the same year as `today`, else "6 May 2026"; months cut to three letters. */
 export function shortDate(day: PlainDateText, today?: PlainDateText): string {
-  const d = Temporal.PlainDate.from(day);
+  const d = datePartsOf(day);
   const base = `${d.day} ${monthName(d.month).slice(0, 3)}`;
-  return today !== undefined && Temporal.PlainDate.from(today).year === d.year ? base : `${base} ${d.year}`;
+  return today !== undefined && datePartsOf(today).year === d.year ? base : `${base} ${d.year}`;
 }
 
 /** "Tue 8 Dec". */
 export function weekdayDate(day: PlainDateText): string {
-  const d = Temporal.PlainDate.from(day);
-  return `${weekdayName(d.dayOfWeek).slice(0, 3)} ${d.day} ${monthName(d.month).slice(0, 3)}`;
+  const d = datePartsOf(day);
+  return `${weekdayName(weekdayOf(day)).slice(0, 3)} ${d.day} ${monthName(d.month).slice(0, 3)}`;
 }
 
 /** "5:30pm", "10:15am", "noon": prose and letters. Takes "17:30". */
@@ -75,44 +74,42 @@ function monthFromWord(word: string): number | null {
   return i < 0 ? null : i + 1;
 }
 
-function fromWeekday(text: string, from: Temporal.PlainDate): Temporal.PlainDate | null {
+function fromWeekday(text: string, today: PlainDateText): PlainDateText | null {
   const match = /^(?:(next|last|this)\s+)?([a-z]{3,9})$/.exec(text);
   if (!match) return null;
   const wanted = weekdays.findIndex((w) => w.toLowerCase().startsWith(match[2] ?? "-")) + 1;
   if (wanted === 0) return null;
-  if (match[1] === "last") return from.subtract({ days: ((from.dayOfWeek - wanted + 6) % 7) + 1 });
-  const ahead = (wanted - from.dayOfWeek + 7) % 7;
-  if (match[1] === "this") return from.add({ days: ahead });
-  return from.add({ days: ahead === 0 ? 7 : ahead });
+  const from = weekdayOf(today);
+  if (match[1] === "last") return addDays(today, -(((from - wanted + 6) % 7) + 1));
+  const ahead = (wanted - from + 7) % 7;
+  if (match[1] === "this") return addDays(today, ahead);
+  return addDays(today, ahead === 0 ? 7 : ahead);
 }
 
-function fromOffset(text: string, from: Temporal.PlainDate): Temporal.PlainDate | null {
+function fromOffset(text: string, today: PlainDateText): PlainDateText | null {
   const match = /^(?:in\s+)?(\d{1,3})\s*(day|week|month)s?(\s+ago)?$/.exec(text);
   if (!match) return null;
   const n = Number(match[1]) * (match[3] ? -1 : 1);
-  return match[2] === "day"
-    ? from.add({ days: n })
-    : match[2] === "week"
-      ? from.add({ weeks: n })
-      : from.add({ months: n });
+  if (match[2] === "month") return addMonths(today, n);
+  return addDays(today, match[2] === "week" ? n * 7 : n);
 }
 
 function fullYear(
   text: string | undefined,
   month: number,
   day: number,
-  from: Temporal.PlainDate,
+  today: PlainDateText,
   past: boolean,
 ): number {
+  const { year } = datePartsOf(today);
   if (text === undefined) {
-    const sameYear = Temporal.PlainDate.from({ year: from.year, month, day: Math.min(day, 28) });
-    if (past) return Temporal.PlainDate.compare(sameYear, from) > 0 ? from.year - 1 : from.year;
-    return from.year;
+    const sameYear = plainDateOf(year, month, Math.min(day, 28)) ?? today;
+    return past && sameYear > today ? year - 1 : year;
   }
   const y = Number(text);
   if (text.length === 4) return y;
-  const century = Math.floor(from.year / 100) * 100;
-  return past ? (century + y > from.year ? century - 100 + y : century + y) : century + y;
+  const century = Math.floor(year / 100) * 100;
+  return past && century + y > year ? century - 100 + y : century + y;
 }
 
 /**
@@ -126,11 +123,10 @@ export function readDate(
   options: { past?: boolean } = {},
 ): PlainDateText | null {
   const clean = text.trim().toLowerCase().replace(/\s+/g, " ");
-  const from = Temporal.PlainDate.from(today);
   const offset = relative[clean];
-  if (offset !== undefined) return from.add({ days: offset }).toString();
-  const words = fromWeekday(clean, from) ?? fromOffset(clean, from);
-  if (words) return words.toString();
+  if (offset !== undefined) return addDays(today, offset);
+  const words = fromWeekday(clean, today) ?? fromOffset(clean, today);
+  if (words) return words;
   const iso = /^(\d{4})-(\d{2})-(\d{2})$/.exec(clean);
   const numeric = /^(\d{1,2})[\s/.-]+(\d{1,2})(?:[\s/.-]+(\d{4}|\d{2}))?$/.exec(clean);
   const solid = /^(\d{2})(\d{2})(\d{4})$/.exec(clean);
@@ -148,10 +144,6 @@ export function readDate(
   if (month === null || !Number.isInteger(month) || month < 1 || month > 12 || !(day >= 1)) return null;
   const year = iso
     ? Number(iso[1])
-    : fullYear((parts ?? named)?.[3], month, day, from, options.past ?? false);
-  try {
-    return Temporal.PlainDate.from({ year, month, day }, { overflow: "reject" }).toString();
-  } catch {
-    return null;
-  }
+    : fullYear((parts ?? named)?.[3], month, day, today, options.past ?? false);
+  return plainDateOf(year, month, day);
 }

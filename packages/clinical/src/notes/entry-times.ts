@@ -1,5 +1,5 @@
 import { plainDateWords } from "@withy/core/date-words";
-import { dayOf, timeOf } from "@withy/core/zoned-time";
+import { dayOf, timeOf } from "@withy/core/wall-clock";
 
 export interface EntryTimes {
   /** Entered after the site's day of the visit had ended. */

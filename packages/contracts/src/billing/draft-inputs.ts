@@ -1,6 +1,6 @@
 import type { VatTreatment } from "@withy/billing/vat";
 import type { Pence } from "@withy/core/money";
-import type { PlainDateText } from "@withy/core/zoned-time";
+import type { PlainDateText } from "@withy/core/plain-date";
 import { z } from "zod";
 import { idField, requiredText, versionField } from "../fields";
 import type { JobView } from "../jobs";

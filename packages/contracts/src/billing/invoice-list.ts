@@ -1,13 +1,11 @@
 import { type AgeBucket, ageBuckets } from "@withy/billing/ageing";
 import type { InvoiceState } from "@withy/billing/invoice-states";
 import type { Pence } from "@withy/core/money";
-import type { PlainDateText } from "@withy/core/zoned-time";
+import type { PlainDateText } from "@withy/core/plain-date";
 import { z } from "zod";
 import { idField, pageFields } from "../fields";
 import type { Page } from "../page";
-
-export const invoiceKinds = ["owed", "overdue", "paid", "refunded", "void", "all"] as const;
-export type InvoiceKind = (typeof invoiceKinds)[number];
+import { invoiceKinds } from "./invoice-kinds";
 
 /** As a query string carries it. `payer` is "patients", or a payer's id. */
 export const listInvoicesInput = z.strictObject({

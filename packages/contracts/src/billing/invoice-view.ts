@@ -2,7 +2,7 @@ import type { PaymentMethod } from "@withy/billing/check-payment";
 import type { InvoiceState } from "@withy/billing/invoice-states";
 import type { VatTreatment } from "@withy/billing/vat";
 import type { Pence } from "@withy/core/money";
-import type { PlainDateText } from "@withy/core/zoned-time";
+import type { PlainDateText } from "@withy/core/plain-date";
 
 export interface InvoiceLineView {
   readonly id: string;

@@ -1,10 +1,6 @@
 import { z } from "zod";
 import { idField } from "../fields";
 
-/** Templates of the messages about one visit. */
-export const appointmentTemplates = ["booking-confirmed", "booking-moved", "booking-cancelled"] as const;
-export type AppointmentTemplate = (typeof appointmentTemplates)[number];
-
 /** What an outbox row about a visit carries: everything its e-mail says. Never what the visit is for. */
 export const appointmentMessagePayload = z.strictObject({
   appointmentId: idField,

@@ -1,7 +1,7 @@
 import { readNhsNumber } from "@withy/core/identifiers/nhs-number";
 import { readPhone } from "@withy/core/identifiers/phone";
 import { normalisePostcode } from "@withy/core/identifiers/postcode";
-import { isPlainDate } from "@withy/core/zoned-time";
+import { isPlainDate } from "@withy/core/plain-date";
 import { z } from "zod";
 import { idField, optionalText, penceField, requiredText, versionField } from "../fields";
 

@@ -1,4 +1,5 @@
-import type { AppointmentMessagePayload, AppointmentTemplate } from "@withy/contracts/diary";
+import type { AppointmentMessagePayload } from "@withy/contracts/diary";
+import type { AppointmentTemplate } from "@withy/contracts/message-words";
 import type { Context } from "../context";
 import { enqueueMessage } from "../messaging";
 import { isoOf, utc } from "./raw-rows";

@@ -1,4 +1,4 @@
-import { appointmentTemplates } from "@withy/contracts/diary";
+import { appointmentTemplates } from "@withy/contracts/message-words";
 import {
   type MessageRow,
   type MessageTemplate,

@@ -1,5 +1,6 @@
 import { ageBuckets } from "@withy/billing/ageing";
-import { invoiceKinds, type ListInvoicesInput } from "@withy/contracts/billing";
+import type { ListInvoicesInput } from "@withy/contracts/billing";
+import { invoiceKinds } from "@withy/contracts/billing/invoice-kinds";
 import type { InvoiceFilters } from "./api-client";
 
 export interface FilterAddress {

@@ -1,4 +1,4 @@
-import { isPlainDate } from "@withy/core/zoned-time";
+import { isPlainDate } from "@withy/core/plain-date";
 import type { DayFilters } from "./api-client";
 
 export interface DayAddress extends DayFilters {

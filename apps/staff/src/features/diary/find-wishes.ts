@@ -1,5 +1,5 @@
 import { shortDate } from "@withy/core/date-words";
-import { isPlainDate } from "@withy/core/zoned-time";
+import { isPlainDate } from "@withy/core/plain-date";
 import type { RankConcern } from "@withy/diary/rank-time";
 import type { WishKind } from "@withy/diary/time-wishes";
 import { readTime } from "./minute-words";

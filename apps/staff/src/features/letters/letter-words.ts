@@ -1,7 +1,7 @@
 import type { LetterActor, LetterSource, LetterView } from "@withy/contracts/letters";
-import { messageStateWords } from "@withy/contracts/messaging";
+import { messageStateWords } from "@withy/contracts/message-words";
 import { longDate, proseTime, shortDate } from "@withy/core/date-words";
-import { dayOf, timeOf } from "@withy/core/zoned-time";
+import { dayOf, timeOf } from "@withy/core/wall-clock";
 
 export const actorWords: Record<LetterActor, string> = { gp: "GP", patient: "Patient", practice: "Us" };
 

@@ -3,7 +3,7 @@ import {
   type MessageTemplate,
   messageStateWords,
   messageTemplateWords,
-} from "@withy/contracts/messaging";
+} from "@withy/contracts/message-words";
 import type { MessageEntry, TimelineEntry, VisitEntry } from "@withy/contracts/patients";
 import { formatMoney } from "@withy/core/money";
 import { dayAndYear } from "./short-day";

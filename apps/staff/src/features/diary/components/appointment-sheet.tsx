@@ -1,7 +1,7 @@
 "use client";
 import type { AppointmentView } from "@withy/contracts/diary";
 import { plainDateWords, shortDate } from "@withy/core/date-words";
-import { ageOn } from "@withy/core/zoned-time";
+import { ageOn } from "@withy/core/plain-date";
 import { stateFacts } from "@withy/diary/appointment-states";
 import { AlertLine } from "@withy/ui/alert-line";
 import { Button, ButtonLink } from "@withy/ui/button";

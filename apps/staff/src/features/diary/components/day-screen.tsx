@@ -1,6 +1,6 @@
 "use client";
 import type { DayAppointment, DiaryDayView } from "@withy/contracts/diary";
-import { addDays } from "@withy/core/zoned-time";
+import { addDays } from "@withy/core/plain-date";
 import { AlertLine } from "@withy/ui/alert-line";
 import { Button } from "@withy/ui/button";
 import { EmptyState } from "@withy/ui/empty-state";

@@ -1,7 +1,7 @@
 "use client";
 import type { DiaryDayView } from "@withy/contracts/diary";
 import { longDate, readDate, titleDate } from "@withy/core/date-words";
-import { addDays } from "@withy/core/zoned-time";
+import { addDays } from "@withy/core/plain-date";
 import { Button, ButtonLink } from "@withy/ui/button";
 import { ChoiceLinks } from "@withy/ui/choice";
 import { Glyph } from "@withy/ui/glyph";

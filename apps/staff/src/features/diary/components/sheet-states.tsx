@@ -1,6 +1,6 @@
 "use client";
 import type { AppointmentView } from "@withy/contracts/diary";
-import { timeOf } from "@withy/core/zoned-time";
+import { timeOf } from "@withy/core/wall-clock";
 import type { AppointmentState } from "@withy/diary/appointment-states";
 import { stateFacts } from "@withy/diary/appointment-states";
 import { Button } from "@withy/ui/button";

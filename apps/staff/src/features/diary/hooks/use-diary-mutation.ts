@@ -1,6 +1,6 @@
 import { useMutation, useQueryClient } from "@tanstack/react-query";
 import type { AppointmentView } from "@withy/contracts/diary";
-import { timeOf } from "@withy/core/zoned-time";
+import { timeOf } from "@withy/core/wall-clock";
 import { useChanges } from "@withy/ui/recent-changes";
 import { diaryKeys } from "../query-keys";
 

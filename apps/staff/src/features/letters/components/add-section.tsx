@@ -1,5 +1,5 @@
 "use client";
-import { type LetterSectionKey, letterHeadings } from "@withy/contracts/letters";
+import { type LetterSectionKey, letterHeadings } from "@withy/contracts/letters/headings";
 import { Select } from "@withy/ui/select";
 import type { LetterDraftHandle } from "../hooks/use-letter-draft";
 import { absentSections, withNewSentence } from "../letter-draft";

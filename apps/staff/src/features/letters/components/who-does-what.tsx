@@ -1,4 +1,5 @@
-import { type LetterSection, letterActors } from "@withy/contracts/letters";
+import type { LetterSection } from "@withy/contracts/letters";
+import { letterActors } from "@withy/contracts/letters/headings";
 import { actorWords } from "../letter-words";
 
 /** The plan again by who has to act, so that nobody's part is overlooked. */

@@ -1,11 +1,6 @@
 "use client";
-import {
-  type LetterActor,
-  type LetterSection,
-  type LetterSentence,
-  type LetterView,
-  letterActors,
-} from "@withy/contracts/letters";
+import type { LetterSection, LetterSentence, LetterView } from "@withy/contracts/letters";
+import { type LetterActor, letterActors } from "@withy/contracts/letters/headings";
 import { Button } from "@withy/ui/button";
 import type { LetterDraftHandle } from "../hooks/use-letter-draft";
 import { withActor, withText } from "../letter-draft";

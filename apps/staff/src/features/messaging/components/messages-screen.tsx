@@ -1,14 +1,9 @@
 "use client";
-import {
-  type ListMessagesInput,
-  type MessageCounts,
-  type MessageRow,
-  messageStateWords,
-  messageTemplateWords,
-} from "@withy/contracts/messaging";
+import { messageStateWords, messageTemplateWords } from "@withy/contracts/message-words";
+import type { ListMessagesInput, MessageCounts, MessageRow } from "@withy/contracts/messaging";
 import type { Page as PageOf } from "@withy/contracts/page";
 import { shortDate } from "@withy/core/date-words";
-import { dayOf, timeOf } from "@withy/core/zoned-time";
+import { dayOf, timeOf } from "@withy/core/wall-clock";
 import { AlertLine } from "@withy/ui/alert-line";
 import { ChoiceLinks } from "@withy/ui/choice";
 import { DataTable } from "@withy/ui/data-table";

@@ -1,6 +1,7 @@
 "use client";
-import { type MessageRow, messageTemplateWords } from "@withy/contracts/messaging";
-import { timeOf } from "@withy/core/zoned-time";
+import { messageTemplateWords } from "@withy/contracts/message-words";
+import type { MessageRow } from "@withy/contracts/messaging";
+import { timeOf } from "@withy/core/wall-clock";
 import { Button } from "@withy/ui/button";
 import { useChanges } from "@withy/ui/recent-changes";
 import { ApiError } from "@/api/request";

@@ -1,6 +1,6 @@
 "use client";
 import type { PatientView } from "@withy/contracts/patients";
-import { timeOf } from "@withy/core/zoned-time";
+import { timeOf } from "@withy/core/wall-clock";
 import { Button, ButtonLink, Buttons } from "@withy/ui/button";
 import { useChanges } from "@withy/ui/recent-changes";
 import Link from "next/link";

@@ -1,5 +1,5 @@
 "use client";
-import { timeOf } from "@withy/core/zoned-time";
+import { timeOf } from "@withy/core/wall-clock";
 import { Button, ButtonLink, Buttons } from "@withy/ui/button";
 import { useChanges } from "@withy/ui/recent-changes";
 import Link from "next/link";

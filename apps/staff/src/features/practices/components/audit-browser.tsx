@@ -1,5 +1,6 @@
 "use client";
-import { type AuditRow, auditSubjects, type ListAuditInput } from "@withy/contracts/audit";
+import type { AuditRow, ListAuditInput } from "@withy/contracts/audit";
+import { auditSubjects } from "@withy/contracts/audit-subjects";
 import { type DataColumn, DataTable } from "@withy/ui/data-table";
 import { EmptyState } from "@withy/ui/empty-state";
 import { FieldRow } from "@withy/ui/field-group";

@@ -2,7 +2,7 @@
 import type { Programme, ProgrammeMode } from "@withy/clinical/programmes/programme";
 import type { ProgrammeView } from "@withy/contracts/programmes";
 import { shortDate } from "@withy/core/date-words";
-import { dayOf, timeOf } from "@withy/core/zoned-time";
+import { dayOf, timeOf } from "@withy/core/wall-clock";
 import { Choice } from "@withy/ui/choice";
 import { PageTitle } from "@withy/ui/page";
 import Link from "next/link";

@@ -1,7 +1,7 @@
 "use client";
 import type { ProgrammeView } from "@withy/contracts/programmes";
 import { plainDateWords } from "@withy/core/date-words";
-import { dayOf } from "@withy/core/zoned-time";
+import { dayOf } from "@withy/core/wall-clock";
 import { AlertLine } from "@withy/ui/alert-line";
 import { Button } from "@withy/ui/button";
 import dynamic from "next/dynamic";

@@ -1,7 +1,7 @@
 "use client";
 import "../programmes.css";
 import type { ProgrammeView } from "@withy/contracts/programmes";
-import { timeOf } from "@withy/core/zoned-time";
+import { timeOf } from "@withy/core/wall-clock";
 import { useChanges } from "@withy/ui/recent-changes";
 import dynamic from "next/dynamic";
 import { useState } from "react";

@@ -2,7 +2,7 @@
 import "../programmes.css";
 import type { ProgrammesOfPatient } from "@withy/contracts/programmes";
 import { clockDuration, plainDateWords } from "@withy/core/date-words";
-import { dayOf } from "@withy/core/zoned-time";
+import { dayOf } from "@withy/core/wall-clock";
 import { AlertLine } from "@withy/ui/alert-line";
 import { Button } from "@withy/ui/button";
 import { EmptyState } from "@withy/ui/empty-state";

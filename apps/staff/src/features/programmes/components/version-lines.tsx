@@ -1,6 +1,6 @@
 import type { ProgrammeView } from "@withy/contracts/programmes";
 import { plainDateWords } from "@withy/core/date-words";
-import { dayOf } from "@withy/core/zoned-time";
+import { dayOf } from "@withy/core/wall-clock";
 import { SectionHead } from "@withy/ui/section-head";
 import Link from "next/link";
 import { handoutAddress } from "../api-client";

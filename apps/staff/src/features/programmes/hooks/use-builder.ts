@@ -1,7 +1,7 @@
 import { findExercise } from "@withy/clinical/exercises/library";
 import type { ProgrammeView } from "@withy/contracts/programmes";
 import { newId } from "@withy/core/ids";
-import { timeOf } from "@withy/core/zoned-time";
+import { timeOf } from "@withy/core/wall-clock";
 import { useChanges } from "@withy/ui/recent-changes";
 import { useState } from "react";
 import { addExercise, changeItem, climb, moveItem, putBack, removeItem } from "../draft-changes";

@@ -1,7 +1,7 @@
 "use client";
 import type { TodayArrival, TodayView } from "@withy/contracts/diary";
 import { titleDate } from "@withy/core/date-words";
-import { timeOf } from "@withy/core/zoned-time";
+import { timeOf } from "@withy/core/wall-clock";
 import { AlertLine } from "@withy/ui/alert-line";
 import { ButtonLink } from "@withy/ui/button";
 import { ChoiceLinks } from "@withy/ui/choice";

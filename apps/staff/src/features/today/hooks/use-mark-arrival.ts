@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from "@tanstack/react-query";
-import { timeOf } from "@withy/core/zoned-time";
+import { timeOf } from "@withy/core/wall-clock";
 import { stateFacts } from "@withy/diary/appointment-states";
 import { useChanges } from "@withy/ui/recent-changes";
 import { markArrival, undoArrival } from "../api-client";

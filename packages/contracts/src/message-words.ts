@@ -1,0 +1,35 @@
+/** Templates of the messages about one visit. */
+export const appointmentTemplates = ["booking-confirmed", "booking-moved", "booking-cancelled"] as const;
+export type AppointmentTemplate = (typeof appointmentTemplates)[number];
+
+export const accountTemplates = ["password-reset", "staff-invitation"] as const;
+export type AccountTemplate = (typeof accountTemplates)[number];
+
+export type MessageTemplate = AppointmentTemplate | AccountTemplate | "letter-waiting";
+
+export const messageTemplates: readonly MessageTemplate[] = [
+  ...appointmentTemplates,
+  ...accountTemplates,
+  "letter-waiting",
+];
+
+export const messageTemplateWords: Record<MessageTemplate, string> = {
+  "booking-confirmed": "Appointment booked",
+  "booking-moved": "Appointment moved",
+  "booking-cancelled": "Appointment cancelled",
+  "password-reset": "New password",
+  "staff-invitation": "Invitation",
+  "letter-waiting": "Letter",
+};
+
+export const messageStates = ["waiting", "claimed", "sent", "failed", "dropped"] as const;
+export type MessageState = (typeof messageStates)[number];
+
+/** What is shown for each state; "claimed" lasts seconds and is told as waiting. */
+export const messageStateWords: Record<MessageState, string> = {
+  waiting: "Waiting to go",
+  claimed: "Waiting to go",
+  sent: "Sent",
+  failed: "Not sent",
+  dropped: "Not needed",
+};
