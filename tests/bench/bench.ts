@@ -182,6 +182,9 @@ for (const path of [
   "/exercises",
   "/letters",
   "/billing",
+  "/reports/month",
+  "/messages",
+  "/settings",
   "/diary",
   "/diary/week",
 ]) {

@@ -114,6 +114,10 @@ export async function fillVolume(connection: Connection, plan: VolumePlan): Prom
     SELECT '${p}', ${volumeIdSql("member", n)}, ${choose(given, n)}, ${family("seq * 37")}, 'physiotherapist', CONCAT('PH', 100000 + seq), 1, ${siteOfPerson}, seq, UTC_TIMESTAMP(3) FROM seq_1_to_${plan.therapists}`);
   await run(`INSERT INTO staff_roles (practice_id, id, staff_member_id, role)
     SELECT '${p}', ${volumeIdSql("role", n)}, ${volumeIdSql("member", n)}, IF(seq = 1, 'owner', 'therapist') FROM seq_1_to_${plan.therapists}`);
+  // The owner treats too, so that one sign-in reaches every page.
+  await run(
+    `INSERT INTO staff_roles (practice_id, id, staff_member_id, role) VALUES ('${p}', UUID(), '${volumeId("member", 0)}', 'therapist')`,
+  );
   await run(
     `INSERT INTO services (practice_id, id, name, kind, duration_minutes) VALUES ('${p}', '${volumeId("service", 1)}', 'Follow-up', 'follow-up', 30)`,
   );
