@@ -5,6 +5,7 @@ import Link from "next/link";
 import { useTransition } from "react";
 import { chooseDesk, leave } from "@/server/actions";
 import { Appearance } from "./appearance";
+import { useLeaving } from "./leaving";
 import { useShortcuts } from "./shortcuts/shortcut-provider";
 
 export interface PersonProps {
@@ -74,8 +75,8 @@ function DeskMenu({ deskSiteId, sites, practiceName, isOpen }: Props) {
 }
 
 function PersonMenu({ name, jobTitle, permissions, onKeys, onRecent, isOpen }: Props) {
-  const [, start] = useTransition();
   const { areOn, switchKeys } = useShortcuts();
+  const { leave: signOut, question } = useLeaving(leave);
   return (
     <Menu.Root defaultOpen={isOpen}>
       <Menu.Trigger className="whobtn">
@@ -104,12 +105,13 @@ function PersonMenu({ name, jobTitle, permissions, onKeys, onRecent, isOpen }: P
             </Menu.CheckboxItem>
             <Appearance />
             <Menu.Separator className="menurule" />
-            <Menu.Item className="menuitem" onClick={() => start(() => leave())}>
+            <Menu.Item className="menuitem" onClick={signOut}>
               Sign out
             </Menu.Item>
           </Menu.Popup>
         </Menu.Positioner>
       </Menu.Portal>
+      {question}
     </Menu.Root>
   );
 }

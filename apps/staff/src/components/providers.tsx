@@ -3,10 +3,11 @@ import { QueryClient, QueryClientProvider } from "@tanstack/react-query";
 import { ChangesProvider } from "@withy/ui/recent-changes";
 import { type ReactNode, useState } from "react";
 import { ApiError } from "@/api/request";
+import { PersonId } from "./person-id";
 import { ShortcutProvider } from "./shortcuts/shortcut-provider";
 
 /** What every signed-in screen stands in: server state, recent changes, shortcuts. */
-export function Providers({ children }: { children: ReactNode }) {
+export function Providers({ personId, children }: { personId: string; children: ReactNode }) {
   const [client] = useState(
     () =>
       new QueryClient({
@@ -21,10 +22,12 @@ export function Providers({ children }: { children: ReactNode }) {
       }),
   );
   return (
-    <QueryClientProvider client={client}>
-      <ChangesProvider>
-        <ShortcutProvider>{children}</ShortcutProvider>
-      </ChangesProvider>
-    </QueryClientProvider>
+    <PersonId id={personId}>
+      <QueryClientProvider client={client}>
+        <ChangesProvider>
+          <ShortcutProvider>{children}</ShortcutProvider>
+        </ChangesProvider>
+      </QueryClientProvider>
+    </PersonId>
   );
 }

@@ -5,7 +5,14 @@ export interface UnsentCopy {
   readonly keptAt: string;
 }
 
-const keyOf = (noteId: string) => `withy.unsent-note.${noteId}`;
+/** Whose text it is and of which note: on a shared browser nobody is shown what a colleague wrote. */
+export interface CopyPlace {
+  readonly personId: string;
+  readonly noteId: string;
+}
+
+const prefix = "withy.unsent-note.";
+const keyOf = ({ personId, noteId }: CopyPlace) => `${prefix}${personId}.${noteId}`;
 
 function isCopy(value: unknown): value is UnsentCopy {
   if (typeof value !== "object" || value === null) return false;
@@ -15,9 +22,9 @@ function isCopy(value: unknown): value is UnsentCopy {
   );
 }
 
-export function readCopy(noteId: string): UnsentCopy | null {
+export function readCopy(place: CopyPlace): UnsentCopy | null {
   try {
-    const value: unknown = JSON.parse(window.localStorage.getItem(keyOf(noteId)) ?? "null");
+    const value: unknown = JSON.parse(window.localStorage.getItem(keyOf(place)) ?? "null");
     return isCopy(value) ? value : null;
   } catch {
     return null;
@@ -25,19 +32,37 @@ export function readCopy(noteId: string): UnsentCopy | null {
 }
 
 /** False where the browser has no room or no storage, so that the screen can say so. */
-export function keepCopy(noteId: string, copy: UnsentCopy): boolean {
+export function keepCopy(place: CopyPlace, copy: UnsentCopy): boolean {
   try {
-    window.localStorage.setItem(keyOf(noteId), JSON.stringify(copy));
+    window.localStorage.setItem(keyOf(place), JSON.stringify(copy));
     return true;
   } catch {
     return false;
   }
 }
 
-export function dropCopy(noteId: string): void {
+export function dropCopy(place: CopyPlace): void {
+  drop((key) => key === keyOf(place));
+}
+
+/** Everyone's: whoever uses this browser next finds nothing. */
+export function dropAllCopies(): void {
+  drop((key) => key.startsWith(prefix));
+}
+
+export function hasCopies(personId: string): boolean {
+  return keys().some((key) => key.startsWith(`${prefix}${personId}.`));
+}
+
+function drop(isMeant: (key: string) => boolean): void {
+  for (const key of keys().filter(isMeant)) window.localStorage.removeItem(key);
+}
+
+function keys(): string[] {
   try {
-    window.localStorage.removeItem(keyOf(noteId));
+    return Object.keys(window.localStorage);
   } catch {
-    // Without storage there was no copy to drop.
+    // Without storage there are no copies.
+    return [];
   }
 }

@@ -10,7 +10,7 @@ export default async function SignedInLayout({ children }: { children: ReactNode
   const { context, jobTitle, practiceName } = await requireSession();
   const [sites, counts] = await Promise.all([listSites(context, {}), headCounts(context, {})]);
   return (
-    <Providers>
+    <Providers personId={context.staffMemberId}>
       <Shell
         name={context.staffName}
         jobTitle={jobTitle}

@@ -1,6 +1,6 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from "vitest";
+import type { UnsentCopy } from "@/components/unsent-copy";
 import { idleMs, type KeeperPorts, longestMs, NoteKeeper, retryMs } from "./note-keeper";
-import type { UnsentCopy } from "./unsent-copy";
 
 const note = {
   id: "n1",
@@ -175,5 +175,41 @@ describe("the keeper of a draft", () => {
     expect(store.copy).not.toBeNull();
     await vi.advanceTimersByTimeAsync(0);
     expect(store.copy).toBeNull();
+  });
+
+  it("keeps nothing once what was typed is taken back", async () => {
+    const { made, store } = ports(async () => {
+      throw new Error("Withy could not be reached.");
+    });
+    const keeper = new NoteKeeper(note, made);
+    keeper.change("plan", "Walk");
+    await keeper.flush();
+    expect(store.copy).not.toBeNull();
+    keeper.change("plan", "");
+    await vi.advanceTimersByTimeAsync(idleMs);
+    expect(store.copy).toBeNull();
+    expect(keeper.current()).toMatchObject({ state: "saved", failure: null });
+  });
+
+  it("keeps nothing after a sign-out, though a save fails late; and keeps again for whoever stayed", async () => {
+    let fail: (reason: Error) => void = () => undefined;
+    const { made, store } = ports(
+      () =>
+        new Promise((_, reject) => {
+          fail = reject;
+        }),
+    );
+    const keeper = new NoteKeeper(note, made);
+    keeper.change("plan", "Walk");
+    void keeper.flush();
+    keeper.abandon();
+    fail(new Error("Your session has ended."));
+    await vi.advanceTimersByTimeAsync(retryMs);
+    keeper.leave();
+    expect(store.copy).toBeNull();
+    expect(made.save).toHaveBeenCalledTimes(1);
+    keeper.change("plan", "Walk on");
+    keeper.leave();
+    expect(store.copy?.body).toEqual({ plan: "Walk on" });
   });
 });

@@ -1,6 +1,6 @@
 import { isSameText } from "@withy/clinical/notes/note-text";
 import type { NoteView, SavedNote, SaveNoteDraftInput, StaleNote } from "@withy/contracts/clinical";
-import type { UnsentCopy } from "./unsent-copy";
+import type { UnsentCopy } from "@/components/unsent-copy";
 
 export type SaveState = "saved" | "typing" | "saving" | "kept-here" | "not-kept" | "clash";
 export type Body = Readonly<Record<string, string>>;
@@ -45,6 +45,7 @@ export class NoteKeeper {
   private saved: Body;
   private seen: number;
   private running: Promise<boolean> | null = null;
+  private isAbandoned = false;
   private readonly timers: {
     idle?: Timer | undefined;
     longest?: Timer | undefined;
@@ -105,7 +106,10 @@ export class NoteKeeper {
     // Again and again: of several that wait for one save, another may have begun the next.
     while (this.running) await this.running;
     if (this.view.clash) return false;
-    if (this.isSaved(this.view.body)) return true;
+    if (this.isSaved(this.view.body)) {
+      this.rest();
+      return true;
+    }
     this.running = this.send();
     const isDone = await this.running;
     this.running = null;
@@ -123,13 +127,29 @@ export class NoteKeeper {
     void this.flush();
   }
 
+  /** The person signs out: what is not saved is given up, unless they stay and write on. */
+  abandon(): void {
+    this.stopTimers();
+    this.isAbandoned = true;
+    this.ports.copies.drop();
+  }
+
   /** The page goes away: what is not saved yet stays in this browser. */
   leave(): void {
+    if (this.isAbandoned) return;
     if (!this.isSaved(this.view.body)) this.keepHere();
     void this.flush();
   }
 
+  /** All is as the server has it, though the last words were taken back by hand. */
+  private rest(): void {
+    if (this.view.state === "saved") return;
+    this.ports.copies.drop();
+    this.show({ state: "saved", failure: null });
+  }
+
   private write(body: Body): void {
+    this.isAbandoned = false;
     this.show({ body, state: this.view.clash ? "clash" : "typing" });
     clearTimeout(this.timers.idle);
     this.timers.idle = setTimeout(() => void this.flush(), idleMs);
@@ -163,10 +183,11 @@ export class NoteKeeper {
       return;
     }
     this.show({ failure: why.sentence, state: isKept ? "kept-here" : "not-kept" });
-    this.timers.retry = setTimeout(() => void this.flush(), retryMs);
+    if (!this.isAbandoned) this.timers.retry = setTimeout(() => void this.flush(), retryMs);
   }
 
   private keepHere(): boolean {
+    if (this.isAbandoned) return false;
     return this.ports.copies.keep({
       version: this.seen,
       body: this.view.body,

@@ -1,5 +1,6 @@
 import type { Metadata } from "next";
 import { redirect } from "next/navigation";
+import { ForgetCopies } from "@/components/forget-copies";
 import { PlainPage } from "@/components/plain-page";
 import { currentSession } from "@/server/context";
 import { SignInForm } from "./sign-in-form";
@@ -12,6 +13,7 @@ export default async function SignInPage({ searchParams }: PageProps<"/sign-in">
   const from = typeof query["from"] === "string" ? query["from"] : "";
   return (
     <PlainPage title="Sign in" lead={leadWords(query)}>
+      {query["left"] === "1" && <ForgetCopies />}
       <SignInForm from={from} />
       <p>
         <a href="/forgot">I forgot my password</a>

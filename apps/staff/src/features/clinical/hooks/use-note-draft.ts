@@ -1,9 +1,11 @@
 import type { NoteView, StaleNote } from "@withy/contracts/clinical";
 import { useEffect, useRef, useState, useSyncExternalStore } from "react";
 import { ApiError } from "@/api/request";
+import { joinLeaving } from "@/components/leaving";
+import { usePersonId } from "@/components/person-id";
+import { dropCopy, keepCopy, readCopy } from "@/components/unsent-copy";
 import { saveNoteDraft } from "../api-client";
 import { type KeeperPorts, NoteKeeper } from "../note-keeper";
-import { dropCopy, keepCopy, readCopy } from "../unsent-copy";
 import { useNoteChange } from "./use-note";
 
 function explain(error: unknown): ReturnType<KeeperPorts["explain"]> {
@@ -16,6 +18,7 @@ function explain(error: unknown): ReturnType<KeeperPorts["explain"]> {
 /** The text being written, with the keeper that saves it. */
 export function useNoteDraft(note: NoteView) {
   const hold = useRef(useNoteChange(note));
+  const place = { personId: usePersonId(), noteId: note.id };
   const [keeper] = useState(
     () =>
       new NoteKeeper(note, {
@@ -31,15 +34,16 @@ export function useNoteDraft(note: NoteView) {
         },
         explain,
         copies: {
-          read: () => readCopy(note.id),
-          keep: (copy) => keepCopy(note.id, copy),
-          drop: () => dropCopy(note.id),
+          read: () => readCopy(place),
+          keep: (copy) => keepCopy(place, copy),
+          drop: () => dropCopy(place),
         },
       }),
   );
   const view = useSyncExternalStore(keeper.subscribe, keeper.current, keeper.current);
   useEffect(() => {
     keeper.restore();
+    const stay = joinLeaving(keeper);
     const again = () => void keeper.flush();
     const onHide = () => keeper.leave();
     const onVisibility = () => document.visibilityState === "hidden" && again();
@@ -50,6 +54,7 @@ export function useNoteDraft(note: NoteView) {
       window.removeEventListener("online", again);
       window.removeEventListener("pagehide", onHide);
       document.removeEventListener("visibilitychange", onVisibility);
+      stay();
       keeper.leave();
     };
   }, [keeper]);

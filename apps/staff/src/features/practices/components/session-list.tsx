@@ -3,6 +3,7 @@ import type { SessionRow } from "@withy/contracts/practices";
 import { Button, Buttons } from "@withy/ui/button";
 import { type DataColumn, DataTable } from "@withy/ui/data-table";
 import { SectionHead } from "@withy/ui/section-head";
+import { useLeaving } from "@/components/leaving";
 import { useEndAllSessions, useEndSession, useSessions } from "../hooks/use-sessions";
 import { momentWords } from "../moment-words";
 
@@ -37,7 +38,9 @@ export function SessionList({ first, zone }: Props) {
         ),
     },
   ];
-  const leaveAll = () => endAll.mutate(undefined, { onSuccess: () => window.location.assign("/sign-in") });
+  const { leave, question } = useLeaving(() =>
+    endAll.mutate(undefined, { onSuccess: () => window.location.assign("/sign-in?left=1") }),
+  );
   const problem = end.error ?? endAll.error;
   return (
     <section aria-labelledby="sessions-title">
@@ -53,10 +56,11 @@ export function SessionList({ first, zone }: Props) {
       )}
       <DataTable caption="Your sessions" columns={columns} rows={data} rowId={(row) => row.id} />
       <Buttons>
-        <Button kind="stop" busy={endAll.isPending} onClick={leaveAll}>
+        <Button kind="stop" busy={endAll.isPending} onClick={leave}>
           Sign out everywhere
         </Button>
       </Buttons>
+      {question}
     </section>
   );
 }
