@@ -12,7 +12,7 @@ export function LetterReaderForm({ token }: { token: string }) {
   const [state, act, isBusy] = useActionState(askReader, unasked);
   if (state.isRight)
     return (
-      <form method="post" action={`/link/${token}/letter/pdf`} target="_blank" rel="noopener">
+      <form key="open" method="post" action={`/link/${token}/letter/pdf`} target="_blank" rel="noopener">
         <input type="hidden" name="bornOn" value={state.bornOn} />
         <p role="status">The date of birth is right.</p>
         <p>
@@ -24,7 +24,7 @@ export function LetterReaderForm({ token }: { token: string }) {
     );
   const problem = state.problem ?? undefined;
   return (
-    <form action={act} noValidate>
+    <form key="ask" action={act} noValidate>
       {problem !== undefined && (
         <ErrorSummary
           title="The letter stays closed"
