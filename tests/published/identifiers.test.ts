@@ -51,6 +51,12 @@ describe("NHS number", () => {
     (end) => expect(isNhsNumber(`999000${end}`)).toBe(true),
   );
 
+  // All ten pass modulus 11, as the library shows, and none is ever issued.
+  test.each([..."0123456789"])("ten times the digit %s is refused", (digit) => {
+    expect(validate(digit.repeat(10))).toBe(true);
+    expect(isNhsNumber(digit.repeat(10))).toBe(false);
+  });
+
   test("agrees with an independent library on any ten digits", () => {
     fc.assert(
       fc.property(fc.stringMatching(/^\d{10}$/), (digits) => {
@@ -105,6 +111,19 @@ describe("postcode", () => {
     "EC1C 1BB",
   ])("%s has not", (text) => expect(hasPostcodeShape(text)).toBe(false));
 
+  // The pattern's sets of letters, place by place: all but those named, or only those named.
+  test.each([
+    ["first", (x: string) => `${x}1 1AA`, [..."ABCDEFGHIJKLMNOPRSTUWYZ"]],
+    ["second", (x: string) => `S${x}1 1AA`, [..."ABCDEFGHKLMNOPQRSTUVWXY"]],
+    ["third, behind one letter and one digit", (x: string) => `W1${x} 1AA`, [..."ABCDEFGHJKPSTUW"]],
+    ["fourth, behind two letters and one digit", (x: string) => `EC1${x} 1BB`, [..."ABEHMNPRVWXY"]],
+    ["last but one", (x: string) => `M1 1${x}E`, [..."ABDEFGHJLNPQRSTUWXYZ"]],
+    ["last", (x: string) => `M1 1A${x}`, [..."ABDEFGHJLNPQRSTUWXYZ"]],
+  ])("the letters that may stand %s", (_place, write, letters) => {
+    const taken = [..."ABCDEFGHIJKLMNOPQRSTUVWXYZ"].filter((letter) => hasPostcodeShape(write(letter)));
+    expect(taken).toEqual(letters);
+  });
+
   test("any spacing and case is put in order", () => expect(normalisePostcode("sw1a1aa")).toBe("SW1A 1AA"));
 });
 
@@ -117,6 +136,13 @@ describe("phone", () => {
     ["+44 (0)7700 900123", "+447700900123"],
     ["0044 7700 900123", "+447700900123"],
     ["07700-900-123", "+447700900123"],
+    // The ranges from here on: Ofcom, from memory.
+    ["0113 496 0123", "+441134960123"],
+    ["0131 496 0123", "+441314960123"],
+    ["029 2018 0123", "+442920180123"],
+    ["028 9649 6123", "+442896496123"],
+    ["03069 990123", "+443069990123"],
+    ["08081 570123", "+448081570123"],
   ])("%s is kept as %s", (text, expected) => expect(readPhone(text)).toBe(expected));
 
   test.each(["12", "not a number", "077009001234567"])("%s is refused", (text) =>

@@ -1,4 +1,12 @@
-import { addDays, addMonths, datePartsOf, type PlainDateText, plainDateOf, weekdayOf } from "./plain-date";
+import {
+  addDays,
+  addMonths,
+  datePartsOf,
+  isPlainDate,
+  type PlainDateText,
+  plainDateOf,
+  weekdayOf,
+} from "./plain-date";
 
 const months = [
   "January",
@@ -66,19 +74,24 @@ export function clockDuration(seconds: number): string {
   return h > 0 ? `${h}:${m.toString().padStart(2, "0")}:${s}` : `${m.toString().padStart(2, "0")}:${s}`;
 }
 
-const relative: Record<string, number> = { yesterday: -1, today: 0, tomorrow: 1 };
+const relative = new Map([
+  ["yesterday", -1],
+  ["today", 0],
+  ["tomorrow", 1],
+]);
 
-function monthFromWord(word: string): number | null {
+/** The place, from 1, of the name that begins with this word of three letters or more; null where none does. */
+function placeIn(names: readonly string[], word: string): number | null {
   if (word.length < 3) return null;
-  const i = months.findIndex((m) => m.toLowerCase().startsWith(word));
+  const i = names.findIndex((name) => name.toLowerCase().startsWith(word));
   return i < 0 ? null : i + 1;
 }
 
 function fromWeekday(text: string, today: PlainDateText): PlainDateText | null {
   const match = /^(?:(next|last|this)\s+)?([a-z]{3,9})$/.exec(text);
   if (!match) return null;
-  const wanted = weekdays.findIndex((w) => w.toLowerCase().startsWith(match[2] ?? "-")) + 1;
-  if (wanted === 0) return null;
+  const wanted = placeIn(weekdays, match[2] ?? "");
+  if (wanted === null) return null;
   const from = weekdayOf(today);
   if (match[1] === "last") return addDays(today, -(((from - wanted + 6) % 7) + 1));
   const ahead = (wanted - from + 7) % 7;
@@ -94,23 +107,32 @@ function fromOffset(text: string, today: PlainDateText): PlainDateText | null {
   return addDays(today, match[2] === "week" ? n * 7 : n);
 }
 
-function fullYear(
-  text: string | undefined,
-  month: number,
+/** The date of a day, a month and the year as typed: four digits, two or none. */
+function withYear(
   day: number,
+  month: number,
+  typed: string | undefined,
   today: PlainDateText,
   past: boolean,
-): number {
+): PlainDateText | null {
+  if (typed?.length === 4) return plainDateOf(Number(typed), month, day);
   const { year } = datePartsOf(today);
-  if (text === undefined) {
-    const sameYear = plainDateOf(year, month, Math.min(day, 28)) ?? today;
-    return past && sameYear > today ? year - 1 : year;
+  const nearest = typed === undefined ? year : Math.floor(year / 100) * 100 + Number(typed);
+  if (!past) return plainDateOf(nearest, month, day);
+  const step = typed === undefined ? 1 : 100;
+  // The latest leap day may lie eight years back: 1900 and 2100 have none.
+  for (let back = 0; back <= 8; back += 1) {
+    const date = plainDateOf(nearest - back * step, month, day);
+    if (date !== null && date <= today) return date;
   }
-  const y = Number(text);
-  if (text.length === 4) return y;
-  const century = Math.floor(year / 100) * 100;
-  return past && century + y > year ? century - 100 + y : century + y;
+  return null;
 }
+
+/** "Wed 6 May" without its weekday; any other first word stays, and so the text is no date. */
+const withoutWeekday = (text: string): string =>
+  text.replace(/^([a-z]{3,9}),? (?=\d)/, (start, word: string) =>
+    placeIn(weekdays, word) === null ? start : "",
+  );
 
 /**
  * Reads a date as people type it: day, month, year in that order ("6/5/2026", "6 5 26", "6 May 2026", "6may"),
@@ -123,27 +145,18 @@ export function readDate(
   options: { past?: boolean } = {},
 ): PlainDateText | null {
   const clean = text.trim().toLowerCase().replace(/\s+/g, " ");
-  const offset = relative[clean];
+  const offset = relative.get(clean);
   if (offset !== undefined) return addDays(today, offset);
   const words = fromWeekday(clean, today) ?? fromOffset(clean, today);
   if (words) return words;
-  const iso = /^(\d{4})-(\d{2})-(\d{2})$/.exec(clean);
+  if (/^\d{4}-\d{2}-\d{2}$/.test(clean)) return isPlainDate(clean) ? clean : null;
   const numeric = /^(\d{1,2})[\s/.-]+(\d{1,2})(?:[\s/.-]+(\d{4}|\d{2}))?$/.exec(clean);
   const solid = /^(\d{2})(\d{2})(\d{4})$/.exec(clean);
-  const named =
-    /^(?:[a-z]{3,9},? )?(\d{1,2})(?:st|nd|rd|th)?[\s/.-]*([a-z]{3,9})[\s/.,-]*(\d{4}|\d{2})?$/.exec(clean);
-  const parts = numeric ?? solid;
-  const day = iso ? Number(iso[3]) : Number((parts ?? named)?.[1]);
-  const month = iso
-    ? Number(iso[2])
-    : parts
-      ? Number(parts[2])
-      : named
-        ? monthFromWord(named[2] ?? "")
-        : null;
-  if (month === null || !Number.isInteger(month) || month < 1 || month > 12 || !(day >= 1)) return null;
-  const year = iso
-    ? Number(iso[1])
-    : fullYear((parts ?? named)?.[3], month, day, today, options.past ?? false);
-  return plainDateOf(year, month, day);
+  const named = /^(\d{1,2})(?:st|nd|rd|th)?[\s/.-]*([a-z]{3,9})[\s/.,-]*(\d{4}|\d{2})?$/.exec(
+    withoutWeekday(clean),
+  );
+  const [, day, middle = "", year] = numeric ?? solid ?? named ?? [];
+  const month = named ? placeIn(months, middle) : Number(middle);
+  if (day === undefined || month === null) return null;
+  return withYear(Number(day), month, year, today, options.past ?? false);
 }

@@ -45,13 +45,13 @@ export function sumPence(amounts: Iterable<Pence>): Pence {
  * pennies left go one each to the earliest parts. 100.00 three ways is 33.34, 33.33, 33.33.
  */
 export function allocate(amount: Pence, weights: readonly number[]): Pence[] {
-  const total = weights.reduce((a, b) => a + b, 0);
-  if (weights.some((w) => !Number.isSafeInteger(w) || w < 0) || total <= 0) {
+  if (weights.some((w) => !Number.isSafeInteger(w) || w < 0) || weights.every((w) => w === 0)) {
     throw new RangeError("Weights must be whole numbers, none below zero, and not all zero.");
   }
+  const total = weights.reduce((sum, w) => sum + BigInt(w), 0n);
   const sign = amount < 0 ? -1 : 1;
   const size = Math.abs(assertPence(amount));
-  const parts = weights.map((w) => divideRounded(BigInt(size) * BigInt(w), BigInt(total), "down"));
+  const parts = weights.map((w) => divideRounded(BigInt(size) * BigInt(w), total, "down"));
   let left = size - sumPence(parts);
   for (let i = 0; left > 0; i = (i + 1) % parts.length) {
     if ((weights[i] ?? 0) === 0) continue;
@@ -77,5 +77,6 @@ export function parseMoney(text: string): Pence | null {
   if (!match) return null;
   const [, minus, pounds = "0", pence = ""] = match;
   const value = Number(pounds.replaceAll(",", "")) * 100 + Number(pence.padEnd(2, "0"));
-  return minus ? -value : value;
+  if (!Number.isSafeInteger(value)) return null;
+  return minus ? 0 - value : value;
 }

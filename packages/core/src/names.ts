@@ -8,7 +8,7 @@ export function foldName(text: string): string {
     .replace(/\p{M}+/gu, "")
     .toLowerCase()
     .replace(/[łđøßæœðþı]/g, (c) => folded[c] ?? c)
-    .replace(/['’`]/g, "")
+    .replace(/['‘’ʼ`´]/g, "")
     .replace(/[^\p{L}\p{N}]+/gu, " ")
     .trim();
 }
