@@ -80,9 +80,8 @@ const relative = new Map([
   ["tomorrow", 1],
 ]);
 
-/** The place, from 1, of the name that begins with this word of three letters or more; null where none does. */
+/** The place, from 1, of the name that begins with this word in small letters; null where none does. */
 function placeIn(names: readonly string[], word: string): number | null {
-  if (word.length < 3) return null;
   const i = names.findIndex((name) => name.toLowerCase().startsWith(word));
   return i < 0 ? null : i + 1;
 }

@@ -135,6 +135,10 @@ describe("a date of birth", () => {
 
   it("a year of four figures is taken at its word", () => expect(born("2 12 2027")).toBe("2027-12-02"));
 
+  it("the latest leap day may lie eight years back", () => {
+    expect(born("29 2", "2104-02-28")).toBe("2096-02-29");
+  });
+
   it("a last day of a month is not taken for one that is past", () => {
     expect(born("31 12", "2026-12-30")).toBe("2025-12-31");
     expect(born("31 12 26", "2026-12-30")).toBe("1926-12-31");

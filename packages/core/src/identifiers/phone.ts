@@ -5,8 +5,7 @@ import { parsePhoneNumberFromString } from "libphonenumber-js/max";
  * asked for: numbers reserved for drama are possible but never assigned.
  */
 export function readPhone(text: string): string | null {
-  const cleaned = text.trim().replace(/\(0\)/g, "");
-  const parsed = parsePhoneNumberFromString(cleaned, "GB");
+  const parsed = parsePhoneNumberFromString(text.trim(), "GB");
   return parsed?.isPossible() ? parsed.number : null;
 }
 
