@@ -18,6 +18,15 @@ const neverDeleted = new Set([
   "card_attempts",
   "programme_versions",
   "episodes",
+  "courses",
+  "class_sessions",
+  "class_attendees",
+  "leave_requests",
+  "waiting_entries",
+  "offer_rounds",
+  "waiting_offers",
+  "cover_plans",
+  "cover_moves",
 ]);
 
 /** One GRANT a table, so that a right that is not named here is not held. */

@@ -139,7 +139,7 @@ describe("forty desks at once", () => {
       .select()
       .from(diaryClaims)
       .where(eq(diaryClaims.practiceId, practice.practiceId));
-    const words = (c: { resourceId: string; slotAt: Date; appointmentId: string }): string =>
+    const words = (c: { resourceId: string; slotAt: Date; appointmentId: string | null }): string =>
       `${c.resourceId} ${c.slotAt.toISOString()} ${c.appointmentId}`;
     expect(held.map(words).sort()).toEqual(live.flatMap(claimsOf).map(words).sort());
   });

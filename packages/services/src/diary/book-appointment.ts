@@ -24,6 +24,7 @@ function newRow(ctx: Context, input: Input, plan: VisitPlan): AppointmentRow {
     ...{
       serviceId,
       episodeId,
+      courseId: null,
       startsAt,
       endsAt,
       cleanDownMinutes,

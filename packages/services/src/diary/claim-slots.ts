@@ -15,16 +15,16 @@ export interface Claim {
   readonly until: Date;
 }
 
-/** Which other visit holds a slot of the claim, or null. */
+/** Which other visit or class holds a slot of the claim, or null. */
 export async function findHolder(ctx: Context, claim: Claim): Promise<string | null> {
-  const rows = await rowsOf<{ appointment_id: string }>(
+  const rows = await rowsOf<{ holder: string }>(
     ctx.db,
-    sql`select c.appointment_id from diary_claims c
+    sql`select coalesce(c.appointment_id, c.class_session_id) as holder from diary_claims c
       where c.practice_id = ${ctx.practiceId} and c.resource_id in (${claim.therapistId}, ${claim.roomId})
         and c.slot_at >= ${sqlTime(claim.startsAt)} and c.slot_at < ${sqlTime(claim.until)}
-        and c.appointment_id <> ${claim.appointmentId} order by c.slot_at limit 1`,
+        and not (c.appointment_id <=> ${claim.appointmentId}) order by c.slot_at limit 1`,
   );
-  return rows[0]?.appointment_id ?? null;
+  return rows[0]?.holder ?? null;
 }
 
 /**

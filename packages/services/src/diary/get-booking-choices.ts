@@ -48,12 +48,14 @@ export const getBookingChoices = verb(
       sites: siteRows
         .filter((s) => reach.has(s.id))
         .map((s) => ({ id: s.id, name: s.name, zone: s.zone, today: dayOf(now, s.zone) })),
-      services: serviceRows.map(({ id, name, kind, durationMinutes, cleanDownMinutes, roomKind }) => ({
-        ...{ id, name, kind, durationMinutes, cleanDownMinutes, roomKind },
-        therapistIds: gives
+      services: serviceRows.flatMap(({ id, name, kind, durationMinutes, cleanDownMinutes, roomKind }) => {
+        // A class has its own times; nobody books one for a single patient.
+        if (kind === "class") return [];
+        const therapistIds = gives
           .filter((g) => g.serviceId === id && active.has(g.staffMemberId))
-          .map((g) => g.staffMemberId),
-      })),
+          .map((g) => g.staffMemberId);
+        return [{ id, name, kind, durationMinutes, cleanDownMinutes, roomKind, therapistIds }];
+      }),
       therapists: people.map((p) => ({
         id: p.id,
         name: `${p.givenName} ${p.familyName}`,

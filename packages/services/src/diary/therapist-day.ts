@@ -70,7 +70,7 @@ export async function readClaimed(
         sql`, `,
       )})
       and c.slot_at >= ${sqlTime(from)} and c.slot_at < ${sqlTime(to)}
-      ${exceptId === null ? sql`` : sql`and c.appointment_id <> ${exceptId}`}`,
+      ${exceptId === null ? sql`` : sql`and not (c.appointment_id <=> ${exceptId})`}`,
   );
   for (const row of rows) {
     const at = utc(row.slot_at);

@@ -14,6 +14,7 @@ import { patients } from "../patients/patients";
 import { rooms } from "../practices/rooms";
 import { sites } from "../practices/sites";
 import { staffMembers } from "../practices/staff-members";
+import { courses } from "./courses";
 import { services } from "./services";
 
 export type AppointmentStateCode =
@@ -36,6 +37,8 @@ export const appointments = mysqlTable(
     patientId: uuid("patient_id").notNull(),
     serviceId: uuid("service_id").notNull(),
     episodeId: uuid("episode_id"),
+    /** The course that it was booked with, where it was. */
+    courseId: uuid("course_id"),
     /** On the five-minute grid (a CHECK holds it there). */
     startsAt: instant("starts_at").notNull(),
     /** End of the visit, without the clean-down. */
@@ -90,6 +93,13 @@ export const appointments = mysqlTable(
       columns: [t.practiceId, t.episodeId],
       foreignColumns: [episodes.practiceId, episodes.id],
     }),
+    foreignKey({
+      name: "appointments_course",
+      columns: [t.practiceId, t.courseId],
+      foreignColumns: [courses.practiceId, courses.id],
+    }),
+    // The visits of a course.
+    index("appointments_by_course").on(t.practiceId, t.courseId, t.startsAt),
     // A therapist's day and week, and busy time when finding a time.
     index("appointments_by_therapist").on(t.practiceId, t.therapistId, t.startsAt, t.endsAt),
     // The site's day grid and the Today page.

@@ -1,4 +1,4 @@
-import { boolean, foreignKey, int, mysqlTable, primaryKey, varchar } from "drizzle-orm/mysql-core";
+import { boolean, foreignKey, int, json, mysqlTable, primaryKey, varchar } from "drizzle-orm/mysql-core";
 import { tenantKey, uuid } from "../../columns";
 import { practices } from "../practices/practices";
 import { staffMembers } from "../practices/staff-members";
@@ -9,13 +9,15 @@ export const services = mysqlTable(
   {
     ...tenantKey(),
     name: varchar("name", { length: 80 }).notNull(),
-    kind: varchar("kind", { length: 12 }).$type<"initial" | "follow-up" | "other">().notNull(),
+    kind: varchar("kind", { length: 12 }).$type<"initial" | "follow-up" | "class" | "other">().notNull(),
     durationMinutes: int("duration_minutes").notNull(),
     cleanDownMinutes: int("clean_down_minutes").notNull().default(0),
     roomKind: varchar("room_kind", { length: 20 })
       .$type<"treatment" | "gym" | "video">()
       .notNull()
       .default("treatment"),
+    /** Codes of equipment that the room must have; empty for none. */
+    needsEquipment: json("needs_equipment").$type<string[]>().notNull().default([]),
     isActive: boolean("is_active").notNull().default(true),
     position: int("position").notNull().default(0),
   },

@@ -1,4 +1,13 @@
-import { foreignKey, index, int, mysqlTable, primaryKey, varchar } from "drizzle-orm/mysql-core";
+import {
+  boolean,
+  foreignKey,
+  index,
+  int,
+  json,
+  mysqlTable,
+  primaryKey,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import { tenantKey, uuid } from "../../columns";
 import { sites } from "./sites";
 
@@ -13,6 +22,9 @@ export const rooms = mysqlTable(
       .$type<"treatment" | "gym" | "video">()
       .notNull()
       .default("treatment"),
+    /** Codes of what stands in it: "plinth-hydraulic", "parallel-bars". */
+    equipment: json("equipment").$type<string[]>().notNull().default([]),
+    isStepFree: boolean("is_step_free").notNull().default(false),
     position: int("position").notNull().default(0),
   },
   (t) => [
