@@ -139,8 +139,11 @@ describe("forty desks at once", () => {
       .select()
       .from(diaryClaims)
       .where(eq(diaryClaims.practiceId, practice.practiceId));
-    const words = (c: { resourceId: string; slotAt: Date; appointmentId: string | null }): string =>
-      `${c.resourceId} ${c.slotAt.toISOString()} ${c.appointmentId}`;
+    const words = (c: {
+      resourceId: string;
+      slotAt: Date;
+      appointmentId?: string | null | undefined;
+    }): string => `${c.resourceId} ${c.slotAt.toISOString()} ${c.appointmentId}`;
     expect(held.map(words).sort()).toEqual(live.flatMap(claimsOf).map(words).sort());
   });
 });
