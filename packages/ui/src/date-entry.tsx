@@ -18,6 +18,8 @@ export interface DateEntryProps {
   hint?: ReactNode;
   error?: string | undefined;
   autoFocus?: boolean;
+  /** The field is left: the moment to say what is wrong with it. */
+  onBlur?: () => void;
 }
 
 /** A date as people say it: "27 3 1958", "6 May", "tomorrow", "next thu". Says below what it understood. */
@@ -52,6 +54,7 @@ export function DateEntry(props: DateEntryProps) {
         autoFocus={props.autoFocus}
         value={value}
         onChange={(event) => onChange(event.target.value, read(event.target.value))}
+        onBlur={props.onBlur}
         aria-invalid={error ? true : undefined}
         aria-describedby={[describedBy(id, { hint, error }), `${id}-understood`].filter(Boolean).join(" ")}
       />

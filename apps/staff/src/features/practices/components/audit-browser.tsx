@@ -6,10 +6,10 @@ import { EmptyState } from "@withy/ui/empty-state";
 import { FieldRow } from "@withy/ui/field-group";
 import { Select } from "@withy/ui/select";
 import { Skeleton } from "@withy/ui/skeleton";
-import { TextInput } from "@withy/ui/text-input";
 import Link from "next/link";
 import { useState } from "react";
 import { useAudit } from "../hooks/use-audit";
+import { AuditDays } from "./audit-days";
 
 const columns: readonly DataColumn<AuditRow>[] = [
   {
@@ -44,10 +44,11 @@ interface Props {
   staff: readonly { id: string; name: string }[];
   /** Narrowed to one patient, as a record's own link does. */
   patientId: string | null;
+  today: string;
 }
 
 /** Who did what, by person, subject and days. */
-export function AuditBrowser({ staff, patientId }: Props) {
+export function AuditBrowser({ staff, patientId, today }: Props) {
   const [filter, setFilter] = useState<ListAuditInput>({ ...(patientId === null ? {} : { patientId }) });
   const { data, error } = useAudit(filter);
   const narrow = (change: ListAuditInput) => setFilter((before) => ({ ...before, ...change, page: 1 }));
@@ -69,18 +70,7 @@ export function AuditBrowser({ staff, patientId }: Props) {
             options={auditSubjects.map((s) => ({ value: s, label: s.replace("-", " ") }))}
             onChange={(event) => narrow({ subjectKind: event.target.value as "patient" })}
           />
-          <TextInput
-            id="from"
-            type="date"
-            label="From"
-            onChange={(event) => narrow({ from: event.target.value })}
-          />
-          <TextInput
-            id="until"
-            type="date"
-            label="Until"
-            onChange={(event) => narrow({ until: event.target.value })}
-          />
+          <AuditDays today={today} onChange={narrow} />
         </FieldRow>
       </div>
       {error && (

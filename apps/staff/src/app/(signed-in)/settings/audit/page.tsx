@@ -1,6 +1,7 @@
 import "@/features/practices/practices.css";
 import { can } from "@withy/core/access/can";
 import { isId } from "@withy/core/ids";
+import { dayOf } from "@withy/core/zoned-time";
 import { listStaff } from "@withy/services/practices";
 import { Page, PageBody, PageTitle } from "@withy/ui/page";
 import type { Metadata } from "next";
@@ -23,6 +24,7 @@ export default async function AuditPage({ searchParams }: PageProps<"/settings/a
         <AuditBrowser
           staff={staff.map(({ id, name }) => ({ id, name }))}
           patientId={isId(patientId) ? patientId : null}
+          today={dayOf(ctx.clock.now(), ctx.zone)}
         />
       </PageBody>
     </Page>
