@@ -1,4 +1,5 @@
 import "@/features/letters/letter.css";
+import "@/features/letters/letter-list.css";
 import { listLetters } from "@withy/services/letters";
 import type { Metadata } from "next";
 import { LettersScreen } from "@/features/letters/components/letters-screen";

@@ -15,13 +15,22 @@ export function LetterLine({
   hidePatient?: boolean;
 }) {
   return (
-    <Line gutter={shortDay(letter.signedAt ?? letter.updatedAt, zone)} note className="letter-row">
+    <Line
+      gutter={shortDay(letter.signedAt ?? letter.updatedAt, zone)}
+      note
+      className="letter-row letter-entry"
+    >
       <span className="grow">
         <Link href={`/letters/${letter.id}`}>{letter.title}</Link>
-        {!hidePatient && <>, {letter.patientName}</>}
-        <span className="soft"> to {letter.recipientName || "nobody yet"}</span>
+        {!hidePatient && (
+          <>
+            <span className="letter-comma">, </span>
+            <span className="letter-person">{letter.patientName}</span>
+          </>
+        )}
+        <span className="letter-person soft"> to {letter.recipientName || "nobody yet"}</span>
       </span>
-      <span className="soft">{letter.authorName}</span>
+      <span className="letter-author soft">{letter.authorName}</span>
       <span className={letter.needsAttention ? "letter-standing warn" : "letter-standing"}>
         {letter.needsAttention && <Glyph name="warn" />} {letter.standing}
       </span>

@@ -1,4 +1,5 @@
 import "@/features/letters/letter.css";
+import "@/features/letters/letter-list.css";
 import { can } from "@withy/core/access/can";
 import { listEpisodes } from "@withy/services/clinical";
 import { listLetters } from "@withy/services/letters";
