@@ -34,7 +34,7 @@ export function MonthTitle({ month }: { month: MonthView }) {
       }
       lead={leadWords(month)}
       actions={
-        <>
+        <span className="btns">
           {month.sites.length > 1 && (
             <SiteChoice
               items={[
@@ -48,7 +48,7 @@ export function MonthTitle({ month }: { month: MonthView }) {
             />
           )}
           <PrintButton />
-        </>
+        </span>
       }
     />
   );
