@@ -9,9 +9,11 @@ export default defineConfig({
   retries: 0,
   forbidOnly: true,
   // A busy machine is no failure; a journey that hangs still ends.
-  timeout: 300_000,
+  timeout: 180_000,
   expect: { timeout: 30_000 },
   use: {
+    actionTimeout: 60_000,
+    navigationTimeout: 60_000,
     baseURL: process.env.WITHY_E2E_URL ?? "http://localhost:3000",
     locale: "en-GB",
     timezoneId: "Europe/London",
