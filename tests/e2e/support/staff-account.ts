@@ -1,4 +1,5 @@
 import type { Page } from "@playwright/test";
+import { expectAccessible } from "./accessible";
 import { demoPassword, expect } from "./journey";
 import { type CaughtMail, waitForMail } from "./mailbox";
 
@@ -52,10 +53,12 @@ export async function setPassword(page: Page, path: string, password: string): P
     page.getByLabel("New password"),
     page.getByLabel("The same password again"),
   ] as const;
+  await expectAccessible(page);
   await first.fill(password);
   await again.fill(`${password} or so`);
   await page.getByRole("button", { name: "Set the password" }).click();
   await expect(page.getByRole("alert").filter({ hasText: "The two passwords differ." })).toBeVisible();
+  await expectAccessible(page);
   await first.fill(password);
   await again.fill(password);
   await page.getByRole("button", { name: "Set the password" }).click();
@@ -63,6 +66,7 @@ export async function setPassword(page: Page, path: string, password: string): P
   await expect(page.getByText("Your password is set. Sign in with it.")).toBeVisible();
   await page.goto(path);
   await expect(page.getByRole("heading", { level: 1 })).toContainText("no longer works");
+  await expectAccessible(page);
 }
 
 export async function join(page: Page, { email, givenName }: Colleague, password: string): Promise<void> {
@@ -102,6 +106,7 @@ export async function resetPassword(page: Page, email: string, password: string)
   await page.getByLabel("E-mail address").fill(email);
   await page.getByRole("button", { name: "Send the link" }).click();
   await expect(page.getByRole("heading", { level: 1 })).toHaveText("Look in your mail");
+  await expectAccessible(page);
   await setPassword(page, pathIn(await waitForMail(email, /^Choose a new password$/)), password);
 }
 

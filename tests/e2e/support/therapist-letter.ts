@@ -1,5 +1,6 @@
 import type { Page } from "@playwright/test";
 import type { LetterView } from "@withy/contracts/letters";
+import { expectAccessible } from "./accessible";
 import { read } from "./desk";
 import { expect } from "./journey";
 import { waitForMail } from "./mailbox";
@@ -87,11 +88,15 @@ export async function readAsDoctor(page: Page, letterId: string, patient: Treate
   const link = /https?:\/\/\S+\/link\/\S+\/letter/.exec(mail.text)?.[0] ?? "";
   await page.goto(new URL(link).pathname);
   await expect(page.getByRole("heading", { level: 1 })).toHaveText("A letter from Marram Physiotherapy");
+  await expectAccessible(page);
   await giveDate(page, "18 5 1971");
   await expect(page.getByRole("link", { name: /born on another day/ })).toBeVisible({ timeout: 30_000 });
   await expect(page.getByLabel("The patient's date of birth")).toHaveValue("18 5 1971");
+  await expectAccessible(page);
   await expect(page.getByRole("button", { name: "Open the letter" })).toHaveCount(0);
   await giveDate(page, patient.bornOn);
+  await expect(page.getByRole("button", { name: "Open the letter" })).toBeVisible({ timeout: 30_000 });
+  await expectAccessible(page);
   const opened = page.context().waitForEvent("response", {
     predicate: (response) => response.url().endsWith("/letter/pdf"),
     timeout: 60_000,
