@@ -40,7 +40,11 @@ export function StaffList({ first, sites, zone, selfId }: Props) {
       ),
     },
     { id: "roles", header: "Roles", cell: (row) => heldWords(row.roles, sites) },
-    { id: "email", header: "Signs in with", cell: (row) => row.email ?? "nothing yet" },
+    {
+      id: "email",
+      header: "Signs in with",
+      cell: (row) => <span className="staff-email">{row.email ?? "nothing yet"}</span>,
+    },
     { id: "seen", header: "Last here", cell: (row) => seenWords(row, zone) },
     {
       id: "do",
