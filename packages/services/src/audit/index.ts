@@ -1,2 +1,2 @@
 export { listAudit } from "./list-audit";
-export { type AuditEntry, recordAudit, recordAudits } from "./record-audit";
+export { type AuditEntry, auditWrite, recordAudit, recordAudits } from "./record-audit";

@@ -22,9 +22,13 @@ export async function recordAudit(ctx: Actor, entry: AuditEntry): Promise<void> 
 
 /** Writes one audit row for each entry in one statement, with the caller's transaction. */
 export async function recordAudits(ctx: Actor, entries: readonly AuditEntry[]): Promise<void> {
-  if (entries.length === 0) return;
+  if (entries.length > 0) await auditWrite(ctx, entries);
+}
+
+/** The statement that writes these audit rows, to run with others. */
+export function auditWrite(ctx: Actor, entries: readonly AuditEntry[]) {
   const at = ctx.clock.now();
-  await ctx.db.insert(auditEvents).values(
+  return ctx.db.insert(auditEvents).values(
     entries.map((entry) => ({
       practiceId: ctx.practiceId,
       id: newId(),

@@ -1,17 +1,20 @@
 import { type AppointmentView, bookAppointmentInput } from "@withy/contracts/diary";
 import { newId } from "@withy/core/ids";
 import { appointments } from "@withy/db/schema";
+import { writeTogether } from "@withy/db/write-together";
 import type { z } from "zod";
 import type { Context } from "../context";
+import { messageWrite } from "../messaging";
 import { once } from "../once";
 import { requireReach } from "../reach";
 import { verb } from "../verb";
 import { readAppointment, viewVisit } from "./appointment-view";
 import type { AppointmentRow } from "./change-appointment";
-import { claimPlan, planVisit, type VisitPlan } from "./plan-visit";
-import { recordChange } from "./record-change";
-import { sendVisitMessage } from "./send-visit-message";
-import type { VisitRow } from "./visit-row";
+import { claimWrite, isSlotTaken } from "./claim-slots";
+import { claimOf, planTaken, planVisit, type VisitPlan } from "./plan-visit";
+import { changeWrites } from "./record-change";
+import { visitMessage } from "./send-visit-message";
+import { newVisitRow, type VisitRow } from "./visit-row";
 
 type Input = z.output<typeof bookAppointmentInput>;
 
@@ -38,6 +41,24 @@ function newRow(ctx: Context, input: Input, plan: VisitPlan): AppointmentRow {
   };
 }
 
+/** Writes the visit, its claims, its history and its message in one journey. @throws refused `slot-taken` */
+async function writeVisit(tx: Context, row: AppointmentRow, plan: VisitPlan): Promise<VisitRow> {
+  const visit = newVisitRow(row, { ...plan.setting.names, room_name: plan.room.name });
+  const message = visitMessage(tx, "booking-confirmed", visit);
+  if (plan.isFree === false) throw await planTaken(tx, row.id, plan);
+  try {
+    await writeTogether(tx.db, [
+      tx.db.insert(appointments).values(row),
+      claimWrite(tx, claimOf(plan, row.id)),
+      ...changeWrites(tx, "booked", null, row),
+      ...(message ? [messageWrite(tx, message)] : []),
+    ]);
+  } catch (error) {
+    throw isSlotTaken(error) ? await planTaken(tx, row.id, plan) : error;
+  }
+  return visit;
+}
+
 /** Books a visit, or says who has the time and what is free next. */
 export const bookAppointment = verb(
   "diary.book",
@@ -50,10 +71,7 @@ export const bookAppointment = verb(
     const { appointmentId } = await once(ctx, "appointment.book", async (tx) => {
       const plan = await planVisit(tx, input, wish);
       const row = newRow(tx, input, plan);
-      await tx.db.insert(appointments).values(row);
-      await claimPlan(tx, row.id, plan);
-      await recordChange(tx, "booked", null, row);
-      written.push(await sendVisitMessage(tx, "booking-confirmed", row.id));
+      written.push(await writeVisit(tx, row, plan));
       return { appointmentId: row.id };
     });
     // A repeat's own rows were rolled back: the visit is the first one's.

@@ -2,6 +2,7 @@ import { notFound } from "@withy/core/errors";
 import { sql } from "drizzle-orm";
 import type { Context } from "../context";
 import { rowsOf } from "./raw-rows";
+import type { VisitNames } from "./visit-row";
 
 /** Who, what and where of a visit, all of the caller's practice. */
 export interface BookingSetting {
@@ -27,6 +28,8 @@ export interface BookingSetting {
     readonly kind: string;
   } | null;
   readonly patient: { readonly id: string; readonly name: string };
+  /** What stands beside the visit once it is booked; the room's name is the chosen room's. */
+  readonly names: Omit<VisitNames, "room_name">;
 }
 
 export interface BookingIds {
@@ -38,26 +41,19 @@ export interface BookingIds {
   readonly episodeId: string | null;
 }
 
-interface Row {
+interface Row extends VisitNames {
   site_id: string | null;
-  site_name: string;
-  zone: string;
   therapist_id: string | null;
-  therapist_name: string;
   therapist_active: number;
   gives: number;
   service_id: string | null;
-  service_name: string;
   duration_minutes: number;
   clean_down_minutes: number;
-  room_kind: string;
   service_active: number;
   room_id: string | null;
-  room_name: string;
   room_site: string;
   kind: string;
   patient_id: string | null;
-  patient_name: string;
   episode_id: string | null;
 }
 
@@ -67,7 +63,10 @@ async function readRow(ctx: Context, ids: BookingIds): Promise<Row | undefined> 
   const rows = await rowsOf<Row>(
     ctx.db,
     sql`
-    select s.id as site_id, s.name as site_name, s.zone,
+    select s.id as site_id, s.name as site_name, s.zone, s.address_lines, s.postcode as site_postcode,
+      s.phone as site_phone, x.notice_hours, x.name as practice_name, x.email as practice_email,
+      x.phone as practice_phone, t.job_title, v.kind as service_kind,
+      c.given_name, c.preferred_name, c.born_on, c.phone, c.email, c.communication_needs,
       t.id as therapist_id, concat(t.given_name, ' ', t.family_name) as therapist_name,
       (t.is_active and t.is_therapist) as therapist_active, (g.service_id is not null) as gives,
       v.id as service_id, v.name as service_name, v.duration_minutes, v.clean_down_minutes, v.room_kind,
@@ -86,6 +85,19 @@ async function readRow(ctx: Context, ids: BookingIds): Promise<Row | undefined> 
     where x.id = ${p}`,
   );
   return rows[0];
+}
+
+function namesIn(row: Row): BookingSetting["names"] {
+  const { site_name, zone, address_lines, site_postcode, site_phone, therapist_name, job_title } = row;
+  const { service_name, service_kind, room_kind, patient_name, given_name, preferred_name } = row;
+  const { born_on, phone, email, communication_needs } = row;
+  const { notice_hours, practice_name, practice_email, practice_phone } = row;
+  return {
+    ...{ site_name, zone, address_lines, site_postcode, site_phone, therapist_name, job_title },
+    ...{ service_name, service_kind, room_kind, patient_name, given_name, preferred_name },
+    ...{ born_on, phone, email, communication_needs },
+    ...{ notice_hours, practice_name, practice_email, practice_phone },
+  };
 }
 
 /** @throws not-found for the first of the ids that is not the practice's */
@@ -117,5 +129,6 @@ export async function loadBookingSetting(ctx: Context, ids: BookingIds): Promise
       ? { id: row.room_id, name: row.room_name, siteId: row.room_site, kind: row.kind }
       : null,
     patient: { id: row.patient_id, name: row.patient_name },
+    names: namesIn(row),
   };
 }

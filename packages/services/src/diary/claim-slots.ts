@@ -32,25 +32,33 @@ export async function findHolder(ctx: Context, claim: Claim): Promise<string | n
  * @returns whether they are now this visit's
  */
 export async function claimSlots(ctx: Context, claim: Claim): Promise<boolean> {
-  // One order of resources for everyone, so that two claims on the same pair cannot wait for each other.
-  const resources = [claim.therapistId, claim.roomId].sort();
-  const slots = slotsOf(claim.startsAt, claim.until);
-  const rows = resources.flatMap((resourceId) =>
-    slots.map((slotAt) => ({
-      practiceId: ctx.practiceId,
-      resourceId,
-      slotAt,
-      appointmentId: claim.appointmentId,
-    })),
-  );
   try {
-    await ctx.db.insert(diaryClaims).values(rows);
+    await claimWrite(ctx, claim);
     return true;
   } catch (error) {
-    if (isDuplicate(error, "PRIMARY")) return false;
+    if (isSlotTaken(error)) return false;
     throw error;
   }
 }
+
+/** The statement that takes the slots, to run with others. It fails as `isSlotTaken` where someone else has one. */
+export function claimWrite(ctx: Context, claim: Claim) {
+  // One order of resources for everyone, so that two claims on the same pair cannot wait for each other.
+  const resources = [claim.therapistId, claim.roomId].sort();
+  const slots = slotsOf(claim.startsAt, claim.until);
+  const { practiceId } = ctx;
+  const { appointmentId } = claim;
+  return ctx.db
+    .insert(diaryClaims)
+    .values(
+      resources.flatMap((resourceId) =>
+        slots.map((slotAt) => ({ practiceId, resourceId, slotAt, appointmentId })),
+      ),
+    );
+}
+
+/** The other tables' primary keys are fresh ids, so a duplicate one is a slot. */
+export const isSlotTaken = (error: unknown): boolean => isDuplicate(error, "PRIMARY");
 
 export async function releaseSlots(ctx: Context, appointmentId: string): Promise<void> {
   await ctx.db

@@ -1,10 +1,10 @@
-import { notFound, refused, refuseIf } from "@withy/core/errors";
+import { type AppError, notFound, refused, refuseIf } from "@withy/core/errors";
 import { addMinutes, dayOf, minutesBetween } from "@withy/core/zoned-time";
 import { checkBooking, readStart } from "@withy/diary/check-booking";
 import type { Context } from "../context";
 import { type BookingIds, type BookingSetting, loadBookingSetting } from "./booking-setting";
 import { type ChosenRoom, chooseRoom } from "./choose-room";
-import { claimSlots, findHolder } from "./claim-slots";
+import { type Claim, claimSlots, findHolder } from "./claim-slots";
 import { slotTaken } from "./slot-taken";
 import { readTherapistDays } from "./therapist-day";
 
@@ -76,13 +76,24 @@ export async function planVisit(ctx: Context, ids: BookingIds, wish: PlanWish): 
 
 /** Takes the plan's time for the visit. @throws refused `slot-taken` where someone else has any of it */
 export async function claimPlan(ctx: Context, appointmentId: string, plan: VisitPlan): Promise<void> {
-  const { setting, room, startsAt, endsAt, cleanDownMinutes } = plan;
-  const until = addMinutes(endsAt, cleanDownMinutes);
-  const claim = { appointmentId, therapistId: setting.therapist.id, roomId: room.id, startsAt, until };
+  const claim = claimOf(plan, appointmentId);
   // The look beforehand only spares a plain "taken" the locks of a failed insert.
   const isFree = plan.isFree ?? (await findHolder(ctx, claim)) === null;
   if (isFree && (await claimSlots(ctx, claim))) return;
-  const durationMinutes = minutesBetween(startsAt, endsAt);
-  const roomKind = setting.service.roomKind;
-  throw await slotTaken(ctx, { ...claim, site: setting.site, roomKind, durationMinutes, cleanDownMinutes });
+  throw await planTaken(ctx, appointmentId, plan);
+}
+
+export function claimOf(plan: VisitPlan, appointmentId: string): Claim {
+  const { setting, room, startsAt, endsAt, cleanDownMinutes } = plan;
+  const until = addMinutes(endsAt, cleanDownMinutes);
+  return { appointmentId, therapistId: setting.therapist.id, roomId: room.id, startsAt, until };
+}
+
+/** The refusal of a plan whose time someone else has. */
+export function planTaken(ctx: Context, appointmentId: string, plan: VisitPlan): Promise<AppError> {
+  const { site, service } = plan.setting;
+  const { cleanDownMinutes } = plan;
+  const durationMinutes = minutesBetween(plan.startsAt, plan.endsAt);
+  const length = { roomKind: service.roomKind, durationMinutes, cleanDownMinutes };
+  return slotTaken(ctx, { ...claimOf(plan, appointmentId), site, ...length });
 }

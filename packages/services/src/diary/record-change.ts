@@ -1,6 +1,8 @@
 import { newId } from "@withy/core/ids";
 import { appointmentChanges, type appointments } from "@withy/db/schema";
-import { recordAudit } from "../audit";
+import { writeTogether } from "@withy/db/write-together";
+import type { SQLWrapper } from "drizzle-orm";
+import { auditWrite } from "../audit";
 import type { Context } from "../context";
 
 type Row = typeof appointments.$inferSelect;
@@ -34,6 +36,11 @@ export async function recordChange(
   before: Row | null,
   after: Row,
 ): Promise<void> {
+  await writeTogether(ctx.db, changeWrites(ctx, kind, before, after));
+}
+
+/** The statements that `recordChange` runs, to run with others. */
+export function changeWrites(ctx: Context, kind: ChangeKind, before: Row | null, after: Row): SQLWrapper[] {
   const changedAt = ctx.clock.now();
   const change = {
     practiceId: ctx.practiceId,
@@ -45,11 +52,9 @@ export async function recordChange(
     changedAt,
   };
   const siteIds = new Set([before?.siteId ?? after.siteId, after.siteId]);
-  await ctx.db
-    .insert(appointmentChanges)
-    .values([...siteIds].map((siteId) => ({ ...change, id: newId(), siteId })));
+  const changes = [...siteIds].map((siteId) => ({ ...change, id: newId(), siteId }));
   const isMoved = before !== null && before.startsAt.getTime() !== after.startsAt.getTime();
-  await recordAudit(ctx, {
+  const entry = {
     action: actions[kind],
     subjectKind: "appointment",
     subjectId: after.id,
@@ -62,5 +67,6 @@ export async function recordChange(
       ...(isMoved ? { startsAtBefore: before.startsAt.toISOString() } : {}),
       ...(after.overrideReason !== null && kind !== "marked" ? { outsideHours: true } : {}),
     },
-  });
+  };
+  return [ctx.db.insert(appointmentChanges).values(changes), auditWrite(ctx, [entry])];
 }

@@ -1,7 +1,7 @@
 import type { AppointmentMessagePayload } from "@withy/contracts/diary";
 import type { AppointmentTemplate } from "@withy/contracts/message-words";
 import type { Context } from "../context";
-import { enqueueMessage } from "../messaging";
+import { enqueueMessage, type OutgoingMessage } from "../messaging";
 import { isoOf, utc } from "./raw-rows";
 import { readVisitRow, type VisitRow } from "./visit-row";
 
@@ -50,9 +50,21 @@ export async function sendVisitMessage(
   previousStartsAt: Date | null = null,
 ): Promise<VisitRow> {
   const row = await readVisitRow(ctx, appointmentId);
+  const message = visitMessage(ctx, template, row, previousStartsAt);
+  if (message) await enqueueMessage(ctx, message);
+  return row;
+}
+
+/** The message about a visit, or null where none is to be sent. */
+export function visitMessage(
+  ctx: Context,
+  template: AppointmentTemplate,
+  row: VisitRow,
+  previousStartsAt: Date | null = null,
+): OutgoingMessage | null {
   const { email } = row;
-  if (email === null || email === "" || utc(row.starts_at) <= ctx.clock.now().getTime()) return row;
-  await enqueueMessage(ctx, {
+  if (email === null || email === "" || utc(row.starts_at) <= ctx.clock.now().getTime()) return null;
+  return {
     template,
     toAddress: email,
     payload: { ...payloadOf(ctx, { ...row, email }, previousStartsAt) },
@@ -60,6 +72,5 @@ export async function sendVisitMessage(
     aboutId: row.id,
     patientId: row.patient_id,
     dedupeKey: `${template}/${row.id}/${row.version}`,
-  });
-  return row;
+  };
 }

@@ -1,8 +1,9 @@
 import { notFound } from "@withy/core/errors";
+import type { appointments } from "@withy/db/schema";
 import type { AppointmentState } from "@withy/diary/appointment-states";
 import { sql } from "drizzle-orm";
 import type { Context } from "../context";
-import { rowsOf } from "./raw-rows";
+import { rowsOf, sqlTime } from "./raw-rows";
 
 /** One visit with the names that stand beside it, as the database gives it. */
 export interface VisitRow {
@@ -49,6 +50,55 @@ export interface VisitRow {
   readonly practice_name: string;
   readonly practice_email: string;
   readonly practice_phone: string;
+}
+
+/** What stands beside a visit's own columns: names, addresses, the practice's words. */
+export type VisitNames = Omit<VisitRow, OwnColumn>;
+
+type OwnColumn =
+  | "id"
+  | "version"
+  | "state"
+  | "site_id"
+  | "therapist_id"
+  | "room_id"
+  | "service_id"
+  | "patient_id"
+  | "episode_id"
+  | "starts_at"
+  | "ends_at"
+  | "clean_down_minutes"
+  | "desk_note"
+  | "override_reason"
+  | "arrived_at"
+  | "session_started_at"
+  | "session_ended_at"
+  | "cancelled_at"
+  | "cancelled_by"
+  | "cancel_reason"
+  | "is_late_cancellation";
+
+/** A visit that is just being booked, put together from what was read for it rather than read again. */
+export function newVisitRow(row: typeof appointments.$inferSelect, names: VisitNames): VisitRow {
+  return {
+    ...names,
+    id: row.id,
+    version: row.version,
+    state: row.state,
+    site_id: row.siteId,
+    therapist_id: row.therapistId,
+    room_id: row.roomId,
+    service_id: row.serviceId,
+    patient_id: row.patientId,
+    episode_id: row.episodeId,
+    starts_at: sqlTime(row.startsAt),
+    ends_at: sqlTime(row.endsAt),
+    clean_down_minutes: row.cleanDownMinutes,
+    desk_note: row.deskNote,
+    override_reason: row.overrideReason,
+    ...{ arrived_at: null, session_started_at: null, session_ended_at: null },
+    ...{ cancelled_at: null, cancelled_by: null, cancel_reason: null, is_late_cancellation: 0 },
+  };
 }
 
 /** A visit of the practice with its names, or not-found. */

@@ -18,20 +18,25 @@ export interface OutgoingMessage {
   dueAt?: Date;
 }
 
-/** Writes one message to the outbox with the caller's transaction. Returns its id, also of an earlier one with the key. */
-export async function enqueueMessage(
-  ctx: SystemContext & { readonly practiceId: string },
-  message: OutgoingMessage,
-): Promise<string> {
+type Sender = SystemContext & { readonly practiceId: string };
+
+/** The statement that writes one message to the outbox, to run with others; it fails where its key was used before. */
+export function messageWrite(ctx: Sender, message: OutgoingMessage, id: string = newId()) {
   const now = ctx.clock.now();
-  const id = newId();
   const { template, toAddress, payload, aboutKind, aboutId, patientId = null, dedupeKey } = message;
   const row = { template, toAddress, payload, aboutKind, aboutId, patientId, dedupeKey };
   const dueAt = message.dueAt ?? now;
+  return ctx.db
+    .insert(outboxMessages)
+    .values({ id, practiceId: ctx.practiceId, channel: "email", ...row, dueAt, createdAt: now });
+}
+
+/** Writes one message to the outbox with the caller's transaction. Returns its id, also of an earlier one with the key. */
+export async function enqueueMessage(ctx: Sender, message: OutgoingMessage): Promise<string> {
+  const id = newId();
+  const { dedupeKey } = message;
   try {
-    await ctx.db
-      .insert(outboxMessages)
-      .values({ id, practiceId: ctx.practiceId, channel: "email", ...row, dueAt, createdAt: now });
+    await messageWrite(ctx, message, id);
     return id;
   } catch (error) {
     if (!isDuplicate(error, "outbox_messages_once")) throw error;

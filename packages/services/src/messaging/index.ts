@@ -2,7 +2,7 @@ export { type MailGateway, type MailSettings, openMail } from "@withy/gateways/m
 export { beatHeart, stopHeart } from "./beat-heart";
 export { checkHealth, type Health } from "./check-health";
 export { type DrainOptions, drainOutbox } from "./drain-outbox";
-export { enqueueMessage, type OutgoingMessage } from "./enqueue-message";
+export { enqueueMessage, messageWrite, type OutgoingMessage } from "./enqueue-message";
 export type { JobHandler, JobRun } from "./job-run";
 export { countMessages, listMessages } from "./list-messages";
 export { pruneOldClaims } from "./prune-claims";
