@@ -27,8 +27,9 @@ const config: NextConfig = {
           { key: "Strict-Transport-Security", value: "max-age=31536000" },
         ],
       },
-      // Records must never lie in a shared browser's cache.
-      { source: "/api/:path*", headers: [{ key: "Cache-Control", value: "no-store" }] },
+      // Records must never lie in a shared browser's cache. A calendar program keeps its feed, so that one says
+      // for itself how it may be kept.
+      { source: "/api/:path((?!feeds/).*)", headers: [{ key: "Cache-Control", value: "no-store" }] },
     ];
   },
 };

@@ -9,6 +9,7 @@ const known = new Map(verbs.map((one) => [one.name, one]));
 const byHand: Readonly<Record<string, string>> = {
   "GET /api/auth/[...nextauth]": "next-auth's own routes",
   "POST /api/auth/[...nextauth]": "next-auth's own routes",
+  "GET /api/feeds/[file]": "asked by calendar programs, without a session; its address is the secret",
   "GET /api/health": "asked by machines, without a session",
   "POST /api/billing/card-events": "signed by the card service, without a session",
 };

@@ -1,4 +1,5 @@
 import type { SystemContext } from "@withy/services/context";
+import { sendDueReminders } from "@withy/services/diary";
 import {
   beatHeart,
   type DrainOptions,
@@ -19,6 +20,7 @@ export interface WorkerOptions extends DrainOptions {
   readonly idleMs?: number;
   readonly beatMs?: number;
   readonly pruneMs?: number;
+  readonly remindMs?: number;
 }
 
 export interface Worker {
@@ -61,7 +63,14 @@ async function repeat(
 
 /** Starts the heartbeat, the mail, the jobs and the housekeeping side by side: none waits for another. */
 export function runWorker(options: WorkerOptions): Worker {
-  const { workerId, newContext, idleMs = 1_000, beatMs = 5_000, pruneMs = 3_600_000 } = options;
+  const {
+    workerId,
+    newContext,
+    idleMs = 1_000,
+    beatMs = 5_000,
+    pruneMs = 3_600_000,
+    remindMs = 60_000,
+  } = options;
   const control = new AbortController();
   const startedAt = newContext().clock.now();
   const loops = [
@@ -76,6 +85,10 @@ export function runWorker(options: WorkerOptions): Worker {
       const { jobHandlers: handlers, onJobFault: onFault } = options;
       const ran = await runNextJob(newContext(), { workerId, handlers, onFault, signal: control.signal });
       return ran ? 0 : idleMs;
+    }),
+    repeat(control.signal, options, "reminders", async () => {
+      await sendDueReminders(newContext());
+      return remindMs;
     }),
     repeat(control.signal, options, "housekeeping", async () =>
       (await pruneOldClaims(newContext())) > 0 ? 100 : pruneMs,

@@ -1,5 +1,7 @@
 export * from "./diary/appointment";
+export * from "./diary/calendar-feed";
 export * from "./diary/day";
 export * from "./diary/finding";
 export * from "./diary/message";
+export * from "./diary/settings";
 export * from "./diary/today";

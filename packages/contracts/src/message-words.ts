@@ -1,5 +1,10 @@
 /** Templates of the messages about one visit. */
-export const appointmentTemplates = ["booking-confirmed", "booking-moved", "booking-cancelled"] as const;
+export const appointmentTemplates = [
+  "booking-confirmed",
+  "booking-moved",
+  "booking-cancelled",
+  "visit-reminder",
+] as const;
 export type AppointmentTemplate = (typeof appointmentTemplates)[number];
 
 export const accountTemplates = ["password-reset", "staff-invitation"] as const;
@@ -17,6 +22,7 @@ export const messageTemplateWords: Record<MessageTemplate, string> = {
   "booking-confirmed": "Appointment booked",
   "booking-moved": "Appointment moved",
   "booking-cancelled": "Appointment cancelled",
+  "visit-reminder": "Reminder",
   "password-reset": "New password",
   "staff-invitation": "Invitation",
   "letter-waiting": "Letter",

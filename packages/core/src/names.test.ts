@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
-import { foldName } from "./names";
+import { foldName, initialsOf } from "./names";
 
 describe("a name as it is compared", () => {
   it.each([
@@ -71,4 +71,14 @@ describe("for any name", () => {
       }),
     );
   });
+});
+
+describe("initials", () => {
+  it.each([
+    ["Perran", "Oake", "P. O."],
+    ["élodie", "van der Berg", "É. V."],
+    ["ángel", "", "Á."],
+    ["", "", ""],
+    ["  Siân ", " ŵyn", "S. Ŵ."],
+  ])("of %j %j are %j", (given, family, initials) => expect(initialsOf(given, family)).toBe(initials));
 });

@@ -24,3 +24,16 @@ const folded: Record<string, string> = {
   þ: "th",
   ı: "i",
 };
+
+const letters = new Intl.Segmenter("en-GB", { granularity: "grapheme" });
+
+const firstLetter = (name: string): string =>
+  [...letters.segment(name.normalize("NFC").trim())][0]?.segment.toLocaleUpperCase("en-GB") ?? "";
+
+/** "P. O." of given and family name, where a full name would tell too much. Empty parts are left out. */
+export function initialsOf(givenName: string, familyName: string): string {
+  return [firstLetter(givenName), firstLetter(familyName)]
+    .filter((letter) => letter !== "")
+    .map((letter) => `${letter}.`)
+    .join(" ");
+}

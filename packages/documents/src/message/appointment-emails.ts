@@ -67,6 +67,22 @@ export function bookingMoved(message: AppointmentMessage, before: Date): Rendere
   return withCalendar(message, content, false);
 }
 
+/** A reminder comes when the notice may have run out, so it asks only for a word as soon as there is one. */
+export function visitReminder(message: AppointmentMessage): RenderedEmail {
+  const content: EmailContent = {
+    subject: `Reminder: your appointment on ${whenWords(message.appointment.startsAt, message.zone)}`,
+    greeting: `Dear ${message.greetingName}`,
+    paragraphs: [`This is a reminder of your appointment at ${message.sender.practice}.`],
+    facts: facts(message),
+    after: [
+      `If you cannot come, please ring ${message.phone} as soon as you know, so that someone else can have the time.`,
+      "The attached file puts the appointment in your calendar.",
+    ],
+    from: message.sender,
+  };
+  return withCalendar(message, content, false);
+}
+
 export function bookingCancelled(message: AppointmentMessage): RenderedEmail {
   const content: EmailContent = {
     subject: `Cancelled: your appointment on ${whenWords(message.appointment.startsAt, message.zone)}`,

@@ -5,6 +5,7 @@ import {
   bookingCancelled,
   bookingConfirmed,
   bookingMoved,
+  visitReminder,
 } from "./appointment-emails";
 import { renderEmail } from "./email";
 import { invoiceSent } from "./invoice-email";
@@ -41,6 +42,7 @@ const every = [
   passwordReset(account),
   staffInvitation(account, "Bethan Rowe"),
   letterWaiting({ sender, recipientName: "Dr Hanne Pryor", reference: "L-0613", url, validFor: "30 days" }),
+  visitReminder(visit),
   invoiceSent({
     sender,
     greetingName: "Eleri",

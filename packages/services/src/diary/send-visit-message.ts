@@ -12,8 +12,9 @@ function addressOf(row: VisitRow): string {
   return [row.site_name, ...lines, row.site_postcode].join(", ");
 }
 
-function payloadOf(
-  ctx: Context,
+/** Everything that a message about the visit says. */
+export function visitPayload(
+  ctx: Pick<Context, "clock">,
   row: VisitRow & { email: string },
   previousStartsAt: Date | null,
 ): AppointmentMessagePayload {
@@ -67,7 +68,7 @@ export function visitMessage(
   return {
     template,
     toAddress: email,
-    payload: { ...payloadOf(ctx, { ...row, email }, previousStartsAt) },
+    payload: { ...visitPayload(ctx, { ...row, email }, previousStartsAt) },
     aboutKind: "appointment",
     aboutId: row.id,
     patientId: row.patient_id,

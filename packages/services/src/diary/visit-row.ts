@@ -102,7 +102,10 @@ export function newVisitRow(row: typeof appointments.$inferSelect, names: VisitN
 }
 
 /** A visit of the practice with its names, or not-found. */
-export async function readVisitRow(ctx: Context, appointmentId: string): Promise<VisitRow> {
+export async function readVisitRow(
+  ctx: Pick<Context, "db" | "practiceId">,
+  appointmentId: string,
+): Promise<VisitRow> {
   const [row] = await rowsOf<VisitRow>(
     ctx.db,
     sql`

@@ -2,14 +2,14 @@ import { type LetterView, sendLetterInput } from "@withy/contracts/letters";
 import { refuseIf } from "@withy/core/errors";
 import { newId } from "@withy/core/ids";
 import { dayOf } from "@withy/core/zoned-time";
-import { consents, letterDeliveries, patients } from "@withy/db/schema";
+import { letterDeliveries, patients } from "@withy/db/schema";
 import { checkSend } from "@withy/documents/letter/check-letter";
-import { and, desc, eq } from "drizzle-orm";
 import { loadSite } from "../clinical/episode-records";
 import type { Context } from "../context";
 import { loadRecord } from "../load-record";
 import { enqueueMessage } from "../messaging";
 import { once } from "../once";
+import { isConsentWithdrawn } from "../patients/is-consent-withdrawn";
 import { verb } from "../verb";
 import { auditLetter } from "./letter-audit";
 import { type LetterAtHand, loadLetter, recipientOf } from "./letter-records";
@@ -37,23 +37,6 @@ async function readerOf(
   const address = [...patient.addressLines, patient.postcode ?? ""].filter((line) => line !== "").join(", ");
   const name = `${patient.givenName} ${patient.familyName}`;
   return { name, email: patient.email, address, whose: "the patient", consent: "email" };
-}
-
-/** Whether the latest word of the patient on this is no. Silence is not a no: the referral came from that doctor. */
-async function isWithdrawn(ctx: Context, patientId: string, kind: Reader["consent"]): Promise<boolean> {
-  const [last] = await ctx.db
-    .select({ withdrawnAt: consents.withdrawnAt })
-    .from(consents)
-    .where(
-      and(
-        eq(consents.practiceId, ctx.practiceId),
-        eq(consents.patientId, patientId),
-        eq(consents.kind, kind),
-      ),
-    )
-    .orderBy(desc(consents.givenAt), desc(consents.id))
-    .limit(1);
-  return last !== undefined && last.withdrawnAt !== null;
 }
 
 async function sendByEmail(
@@ -96,7 +79,8 @@ export const sendLetter = verb(
       const reader = await readerOf(tx, at, input.to);
       // Post and hand are always open to the patient: it is their letter.
       const asksConsent = input.to === "recipient" || input.channel === "email";
-      const isRefusedByPatient = asksConsent && (await isWithdrawn(tx, letter.patientId, reader.consent));
+      const isRefusedByPatient =
+        asksConsent && (await isConsentWithdrawn(tx, letter.patientId, reader.consent));
       const email = input.email ?? reader.email;
       refuseIf(
         checkSend({

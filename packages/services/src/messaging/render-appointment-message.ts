@@ -11,7 +11,8 @@ import { findRecord } from "../load-record";
 import type { OutboxRow } from "./claim-messages";
 import type { Renderer } from "./message-renderer";
 
-function messageOf(payload: AppointmentMessagePayload): AppointmentMessage {
+/** The payload as the message's writer wants it. */
+export function messageOf(payload: AppointmentMessagePayload): AppointmentMessage {
   return {
     appointment: {
       id: payload.appointmentId,

@@ -5,11 +5,13 @@ import type { PostOffice, Renderer } from "./message-renderer";
 import { renderPasswordReset, renderStaffInvitation } from "./render-account-message";
 import { renderAppointmentMessage } from "./render-appointment-message";
 import { renderLetterMessage } from "./render-letter-message";
+import { renderVisitReminder } from "./render-visit-reminder";
 
 const renderers: Record<string, Renderer> = {
   "booking-confirmed": renderAppointmentMessage,
   "booking-moved": renderAppointmentMessage,
   "booking-cancelled": renderAppointmentMessage,
+  "visit-reminder": renderVisitReminder,
   "password-reset": renderPasswordReset,
   "staff-invitation": renderStaffInvitation,
   "letter-waiting": renderLetterMessage,

@@ -1,5 +1,11 @@
 import type { AuditPage, ListAuditInput } from "@withy/contracts/audit";
 import type {
+  ChangeDiarySettingsInput,
+  DiarySettingsView,
+  MyCalendarFeedView,
+  NewCalendarFeedView,
+} from "@withy/contracts/diary";
+import type {
   ChangeRolesInput,
   DeactivatedView,
   InviteStaffMemberInput,
@@ -39,3 +45,10 @@ export const sendInvitationAgain = (staffMemberId: string) =>
 
 export const listAudit = (filter: ListAuditInput, signal?: AbortSignal) =>
   get<AuditPage>("/api/audit", { ...filter } as Record<string, string | number>, signal);
+
+export const changeDiarySettings = (input: ChangeDiarySettingsInput) =>
+  write<DiarySettingsView>("PUT", "/api/diary/settings", input);
+
+export const makeCalendarFeed = () => write<NewCalendarFeedView>("POST", "/api/diary/feed");
+
+export const revokeCalendarFeed = () => write<MyCalendarFeedView>("DELETE", "/api/diary/feed");

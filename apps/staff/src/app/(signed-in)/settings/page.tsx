@@ -1,10 +1,12 @@
 import "@/features/practices/practices.css";
+import { getDiarySettings } from "@withy/services/diary";
 import { getPracticeSettings, listStaff } from "@withy/services/practices";
 import { ButtonLink } from "@withy/ui/button";
 import { Page, PageBody, PageTitle } from "@withy/ui/page";
 import type { Metadata } from "next";
 import Link from "next/link";
 import { PracticeSettings } from "@/features/practices/components/practice-settings";
+import { ReminderSettings } from "@/features/practices/components/reminder-settings";
 import { StaffList } from "@/features/practices/components/staff-list";
 import { requireContext } from "@/server/context";
 
@@ -12,7 +14,11 @@ export const metadata: Metadata = { title: "Settings" };
 
 export default async function SettingsPage() {
   const ctx = await requireContext("practice.manage");
-  const [settings, staff] = await Promise.all([getPracticeSettings(ctx, {}), listStaff(ctx, {})]);
+  const [settings, staff, diary] = await Promise.all([
+    getPracticeSettings(ctx, {}),
+    listStaff(ctx, {}),
+    getDiarySettings(ctx, {}),
+  ]);
   return (
     <Page>
       <PageTitle
@@ -31,6 +37,7 @@ export default async function SettingsPage() {
           zone={ctx.zone}
           selfId={ctx.staffMemberId}
         />
+        <ReminderSettings first={diary} zone={ctx.zone} />
         <PracticeSettings settings={settings} />
       </PageBody>
     </Page>
