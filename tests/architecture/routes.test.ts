@@ -11,6 +11,7 @@ const byHand: Readonly<Record<string, string>> = {
   "POST /api/auth/[...nextauth]": "next-auth's own routes",
   "GET /api/feeds/[file]": "asked by calendar programs, without a session; its address is the secret",
   "GET /api/health": "asked by machines, without a session",
+  "GET /api/openapi.json": "says nothing about any practice",
   "POST /api/billing/card-events": "signed by the card service, without a session",
 };
 
