@@ -97,6 +97,7 @@ async function measure(secrets, running, dbPort) {
   const env = {
     ...bench,
     WITHY_BENCH_LARGE: large.url,
+    WITHY_BENCH_PID: String(large.program.child.pid),
     WITHY_BENCH_SMALL: small.url,
     WITHY_BENCH_BLANK: blank.url,
   };

@@ -1,6 +1,7 @@
 import { addDays, dayOf, weekdayOf } from "@withy/core/zoned-time";
 import mysql from "mysql2/promise";
 import { startBareServer } from "./bare-server";
+import { measureStreams, streamCount } from "./live-streams";
 import { scriptBytes } from "./page-weight";
 import { openSession } from "./signed-in";
 import { p50, percentile, type Timed, timeInTurn } from "./timing";
@@ -171,6 +172,11 @@ const booking = await timeInTurn(
 say(booking);
 const [insertTime, bookTime] = Object.values(booking).map(p50);
 judge("booking against a bare committed insert", (bookTime ?? 0) / (insertTime ?? 1), 4, "x");
+
+console.log("\nLive streams open on one process");
+const grown = await measureStreams(apps.large, cookies.large, Number(read("WITHY_BENCH_PID")));
+console.log(`  ${`memory grown with ${streamCount} streams`.padEnd(44)} ${grown.toFixed(1).padStart(8)} MB`);
+judge(`memory of ${streamCount} live streams`, grown, 150, "MB");
 
 console.log("\nScript beyond a blank page, gzipped");
 const blank = await scriptBytes(apps.blank, "/", "");

@@ -11,6 +11,8 @@ export { getMyCalendarFeed } from "./get-my-calendar-feed";
 export { getTherapistWeek } from "./get-therapist-week";
 export { listRecentChanges } from "./list-recent-changes";
 export { listToday } from "./list-today";
+export { getDiaryWatch } from "./live/get-diary-watch";
+export { type Follower, type LiveHub, openLiveHub } from "./live/live-hub";
 export { makeCalendarFeed } from "./make-calendar-feed";
 export { markAppointment } from "./mark-appointment";
 export { moveAppointment } from "./move-appointment";

@@ -1,10 +1,11 @@
 import { keepPreviousData, useQuery, useQueryClient } from "@tanstack/react-query";
 import type { DiaryDayView } from "@withy/contracts/diary";
 import { useEffect } from "react";
+import { useLiveDiary } from "@/components/use-live-diary";
 import { type DayFilters, fetchDay, fetchPulse } from "../api-client";
 import { diaryKeys } from "../query-keys";
 
-/** Another desk's change must show within two seconds: a cheap question every second and a half. */
+/** Where there is no stream, another desk's change still shows within two seconds: a cheap question every second and a half. */
 const pulseMs = 1500;
 
 /** The day, kept up to date with what other desks do. `first` is what the page was rendered with. */
@@ -18,10 +19,11 @@ export function useDiaryDay(filters: DayFilters, first: { filters: DayFilters; d
     ...(isFirst ? { initialData: first.day } : {}),
   });
   const siteIds = query.data?.sites.map((site) => site.id) ?? [];
+  const isLive = useLiveDiary(siteIds);
   const pulse = useQuery({
     queryKey: diaryKeys.pulse(siteIds),
     queryFn: ({ signal }) => fetchPulse(siteIds, signal),
-    enabled: siteIds.length > 0,
+    enabled: siteIds.length > 0 && !isLive,
     refetchInterval: pulseMs,
     staleTime: 0,
   });
@@ -29,8 +31,8 @@ export function useDiaryDay(filters: DayFilters, first: { filters: DayFilters; d
   const ours = query.data?.pulse;
   const isIdle = !query.isFetching;
   useEffect(() => {
-    if (theirs !== undefined && isIdle && theirs !== ours)
+    if (!isLive && theirs !== undefined && isIdle && theirs !== ours)
       void client.invalidateQueries({ queryKey: diaryKeys.all });
-  }, [theirs, ours, isIdle, client]);
+  }, [isLive, theirs, ours, isIdle, client]);
   return query;
 }

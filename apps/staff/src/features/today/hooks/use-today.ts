@@ -1,14 +1,16 @@
 import { useQuery, useQueryClient } from "@tanstack/react-query";
 import type { TodayView } from "@withy/contracts/diary";
 import { useEffect } from "react";
+import { useLiveDiary } from "@/components/use-live-diary";
 import { fetchPulse, fetchToday } from "../api-client";
 import { todayKeys } from "../query-keys";
 
+/** Asked only where there is no stream. */
 const pulseMs = 1500;
 /** Waiting times and gaps move on by themselves. */
 const agesMs = 60_000;
 
-/** What is next at these sites. The waiting room fills at other desks too, so a cheap question is asked often. */
+/** What is next at these sites. The waiting room fills at other desks too, so changes are streamed. */
 export function useToday(siteIds: readonly string[], first: TodayView) {
   const client = useQueryClient();
   const query = useQuery({
@@ -18,17 +20,19 @@ export function useToday(siteIds: readonly string[], first: TodayView) {
     refetchInterval: agesMs,
   });
   const shown = query.data.sites.map((site) => site.id);
+  const isLive = useLiveDiary(shown);
   const theirs = useQuery({
     queryKey: todayKeys.pulse(shown),
     queryFn: ({ signal }) => fetchPulse(shown, signal),
+    enabled: !isLive,
     refetchInterval: pulseMs,
     staleTime: 0,
   }).data?.pulse;
   const ours = query.data.pulse;
   const isIdle = !query.isFetching;
   useEffect(() => {
-    if (theirs !== undefined && isIdle && theirs !== ours)
+    if (!isLive && theirs !== undefined && isIdle && theirs !== ours)
       void client.invalidateQueries({ queryKey: todayKeys.all });
-  }, [theirs, ours, isIdle, client]);
+  }, [isLive, theirs, ours, isIdle, client]);
   return query;
 }
