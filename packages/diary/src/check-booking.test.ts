@@ -8,8 +8,8 @@ const facts: BookingFacts = {
   cleanDownMinutes: 5,
   now: at("09:42"),
   site: { id: "saltgate", name: "Saltgate", zone: "Europe/London" },
-  room: { name: "Reed", siteId: "saltgate", kind: "treatment" },
-  service: { name: "Follow-up", roomKind: "treatment", isActive: true },
+  room: { name: "Reed", siteId: "saltgate", kind: "treatment", equipment: ["hoist"], isStepFree: false },
+  service: { name: "Follow-up", roomKind: "treatment", needsEquipment: [], isActive: true },
   therapist: { name: "Nia Prosser", givesService: true, isActive: true },
   working: [
     { from: at("08:00").getTime(), to: at("12:30").getTime() },
@@ -30,12 +30,16 @@ describe("checking a booking", () => {
     ["five minutes ago", { startsAt: at("09:35") }, "in-the-past"],
     ["this very minute", { now: at("10:15") }, null],
     ["just begun, with grace", { startsAt: at("09:30"), graceMinutes: 15 }, null],
+    ["a room elsewhere", { room: { ...facts.room, name: "Bay 2", siteId: "tollhouse" } }, "room-elsewhere"],
+    ["the wrong kind of room", { room: { ...facts.room, name: "Gym", kind: "gym" } }, "wrong-room"],
+    ["equipment that is there", { service: { ...facts.service, needsEquipment: ["hoist"] } }, null],
     [
-      "a room elsewhere",
-      { room: { name: "Bay 2", siteId: "tollhouse", kind: "treatment" } },
-      "room-elsewhere",
+      "equipment that is not",
+      { service: { ...facts.service, needsEquipment: ["hoist", "treadmill"] } },
+      "wrong-room",
     ],
-    ["the wrong kind of room", { room: { name: "Gym", siteId: "saltgate", kind: "gym" } }, "wrong-room"],
+    ["a step on the way", { needsStepFree: true }, "wrong-room"],
+    ["no step on the way", { needsStepFree: true, room: { ...facts.room, isStepFree: true } }, null],
     ["a service that ended", { service: { ...facts.service, isActive: false } }, "service-ended"],
     [
       "a therapist without the service",
@@ -59,6 +63,27 @@ describe("checking a booking", () => {
     const refused = checkBooking({ ...facts, startsAt: at("18:00") });
     expect(refused?.message).toBe(
       "Nia Prosser does not work at Saltgate at that time on Tuesday 1 December 2026. Choose another time, or say why it is booked all the same.",
+    );
+  });
+});
+
+describe("the way between two sites", () => {
+  const away = (from: string, to: string) => ({
+    ...{ from: at(from).getTime(), to: at(to).getTime() },
+    ...{ siteName: "Tollhouse Lane", minutesThere: 20, minutesBack: 25 },
+  });
+  it.each<[string, Partial<BookingFacts>, string | null]>([
+    ["just arrives", { away: [away("09:00", "09:50")] }, null],
+    ["arrives too late", { away: [away("09:00", "09:55")] }, "too-far-apart"],
+    ["cleans and just leaves", { away: [away("11:10", "12:00")] }, null],
+    ["has to leave before the cleaning is done", { away: [away("11:05", "12:00")] }, "too-far-apart"],
+    ["is there already, which the claims tell", { away: [away("10:00", "11:00")] }, null],
+    ["with a reason", { away: [away("09:00", "09:55")], overrideReason: "By car today" }, null],
+  ])("%s", (_name, change, kind) => expect(checkBooking({ ...facts, ...change })?.kind ?? null).toBe(kind));
+
+  it("says how long it takes and when there is time", () => {
+    expect(checkBooking({ ...facts, away: [away("09:00", "09:55")] })?.message).toBe(
+      "Nia Prosser is at Tollhouse Lane until 09:55, and the way to Saltgate takes 25 minutes. Choose 10:20 or later, or say why it is booked all the same.",
     );
   });
 });

@@ -1,7 +1,10 @@
 import { longDate } from "@withy/core/date-words";
 import { type Refusal, refusal } from "@withy/core/refusal";
 import { dayOf, instantAt, type PlainDateText, type PlainTimeText, timeOf } from "@withy/core/zoned-time";
+import { type AwayVisit, checkWay } from "./check-way";
+import { equipmentWords } from "./equipment";
 import { contains, type Interval } from "./interval";
+import { missingEquipment, type RoomFacts } from "./room-suits";
 import { isOnGrid, isWholeSlots } from "./slots";
 
 export interface BookingFacts {
@@ -12,8 +15,15 @@ export interface BookingFacts {
   /** A visit that was given may still be written down, up to this many minutes after its start. */
   readonly graceMinutes?: number;
   readonly site: { readonly id: string; readonly name: string; readonly zone: string };
-  readonly room: { readonly name: string; readonly siteId: string; readonly kind: string };
-  readonly service: { readonly name: string; readonly roomKind: string; readonly isActive: boolean };
+  readonly room: RoomFacts & { readonly name: string; readonly siteId: string };
+  readonly service: {
+    readonly name: string;
+    readonly roomKind: string;
+    readonly needsEquipment: readonly string[];
+    readonly isActive: boolean;
+  };
+  /** Whether the patient has to reach the room without a step. */
+  readonly needsStepFree?: boolean;
   readonly therapist: { readonly name: string; readonly givesService: boolean; readonly isActive: boolean };
   /** When the therapist works at the site around that time, without appointments, leave and blocks taken off. */
   readonly working: readonly Interval[];
@@ -21,6 +31,8 @@ export interface BookingFacts {
   readonly closedReason?: string | undefined;
   /** Leave and blocks of the therapist and of the room. */
   readonly blocked: readonly (Interval & { readonly reason: string })[];
+  /** The therapist's visits at other sites around that time. */
+  readonly away?: readonly AwayVisit[];
   /** Why it is booked outside working hours all the same; empty or absent where it is not. */
   readonly overrideReason?: string | undefined;
 }
@@ -62,6 +74,19 @@ function checkPlace(f: BookingFacts): Refusal | null {
       `${f.service.name} needs another kind of room than ${f.room.name}.`,
       "roomId",
     );
+  const missing = missingEquipment(f.room, f.service.needsEquipment);
+  if (missing.length > 0)
+    return refusal(
+      "wrong-room",
+      `${f.service.name} needs ${equipmentWords(missing)}, and ${f.room.name} has none. Choose another room.`,
+      "roomId",
+    );
+  if (f.needsStepFree === true && !f.room.isStepFree)
+    return refusal(
+      "wrong-room",
+      `${f.room.name} is not reached without a step. Choose another room.`,
+      "roomId",
+    );
   if (!f.therapist.isActive || !f.therapist.givesService)
     return refusal(
       "wrong-therapist",
@@ -93,7 +118,7 @@ function checkHours(f: BookingFacts): Refusal | null {
 
 /**
  * Whether a visit may be booked at that time, apart from what is already taken (the database alone decides that).
- * Working hours and blocks give way to a reason; nothing else does.
+ * Working hours, blocks and the way between sites give way to a reason; nothing else does.
  * @returns the first thing in the way, or null
  */
 export function checkBooking(f: BookingFacts): Refusal | null {
@@ -101,5 +126,5 @@ export function checkBooking(f: BookingFacts): Refusal | null {
   if (length) return length;
   if (f.startsAt.getTime() + (f.graceMinutes ?? 0) * 60_000 < f.now.getTime())
     return refusal("in-the-past", "That time has passed. Choose a later one.", "startsAt");
-  return checkPlace(f) ?? checkHours(f);
+  return checkPlace(f) ?? checkHours(f) ?? checkWay(f);
 }

@@ -9,6 +9,8 @@ const givingUp: Record<WishKind, string> = {
   site: "Any site",
   therapist: "Any therapist",
   latest: "A later date",
+  windows: "Any time outside the windows",
+  needs: "A room without what was asked of it",
 };
 
 function bestRelaxation(input: FindTimesInput, tally: Tally): NoTimes["relax"] {

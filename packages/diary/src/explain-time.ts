@@ -19,7 +19,9 @@ const hasAnyWish = (w: TimeWishes): boolean =>
   [w.weekdays, w.partsOfDay, w.siteIds, w.therapistIds].some((l) => (l?.length ?? 0) > 0) ||
   w.fromTime !== undefined ||
   w.untilTime !== undefined ||
-  w.latestOn !== undefined;
+  w.latestOn !== undefined ||
+  (w.windows?.length ?? 0) > 0 ||
+  w.needsRoom === true;
 
 const wallText = (minutes: number): string =>
   `${String(Math.floor(minutes / 60)).padStart(2, "0")}:${String(minutes % 60).padStart(2, "0")}`;
@@ -42,6 +44,7 @@ function missedWish(input: FindTimesInput, c: Candidate, wish: WishKind): string
   if (wish === "site") return `At ${name(input.sites, c.siteId)}, which was not asked for`;
   if (wish === "therapist") return `With ${name(input.therapists, c.therapistId)}, who was not asked for`;
   if (wish === "latest") return "Later than was asked for";
+  if (wish === "windows") return "Outside the windows that were asked for";
   return `${weekdayDate(c.clock.day).slice(0, 3)} was not asked for`;
 }
 

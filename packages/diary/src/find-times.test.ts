@@ -3,7 +3,16 @@ import { describe, expect, it } from "vitest";
 import { findTimes } from "./find-times";
 import type { FindTimesInput } from "./found-times";
 import type { Interval } from "./interval";
-import { bestScoreAfter, dayScore, totalScore, waitScore, weightsOf } from "./rank-time";
+import {
+  bestScoreAfter,
+  dayScore,
+  rankConcerns,
+  searchWeights,
+  totalScore,
+  urgencies,
+  waitScore,
+  weightsOf,
+} from "./rank-time";
 
 const at = (text: string): Date => new Date(`2026-12-${text}:00Z`);
 const span = (a: string, b: string): Interval => ({ from: at(a).getTime(), to: at(b).getTime() });
@@ -44,6 +53,7 @@ const base: FindTimesInput = {
     { therapistId: "nia", visits: 6, isLast: true },
     { therapistId: "ingrid", visits: 1, isLast: false },
   ],
+  weights: { wish: 40, wait: 30, knows: 20, day: 10 },
   limit: 7,
 };
 const starts = (input: FindTimesInput): string[] =>
@@ -169,6 +179,18 @@ describe("what counts", () => {
   it("weighs the first of the order most and forgets none", () => {
     expect(weightsOf(["day"])).toEqual({ day: 0.4, wish: 0.3, wait: 0.2, knows: 0.1 });
   });
+  it("adds up to one, and urgency only makes the wait count more", () => {
+    const part = fc.integer({ min: 0, max: 100 });
+    fc.assert(
+      fc.property(fc.record({ wish: part, wait: part, knows: part, day: part }), (weights) => {
+        const shares = urgencies.map((urgency) => searchWeights({ weights, urgency }));
+        for (const share of shares)
+          expect(rankConcerns.reduce((sum, c) => sum + share[c], 0)).toBeCloseTo(1, 9);
+        expect(shares[1]?.wait).toBeGreaterThanOrEqual(shares[0]?.wait ?? 1);
+        expect(shares[2]?.wait).toBeGreaterThanOrEqual(shares[1]?.wait ?? 1);
+      }),
+    );
+  });
   it("knows the best that a later time can score", () => {
     const part = fc.double({ min: 0, max: 1, noNaN: true });
     const order = fc.shuffledSubarray(["wish", "wait", "knows", "day"] as const, { minLength: 0 });
@@ -182,7 +204,7 @@ describe("what counts", () => {
         order,
         (wish, knows, day, after, more, first) => {
           const score = totalScore({ wish, knows, day, wait: waitScore(after + more) }, weightsOf(first));
-          expect(score).toBeLessThanOrEqual(bestScoreAfter(after, first) + 1e-9);
+          expect(score).toBeLessThanOrEqual(bestScoreAfter(after, weightsOf(first)) + 1e-9);
         },
       ),
     );

@@ -2,17 +2,18 @@ import { dayClocks } from "./day-clock";
 import { explainNone } from "./explain-none";
 import { explainTime } from "./explain-time";
 import type { Candidate, FindTimesInput, FoundTime, FoundTimes } from "./found-times";
-import { weightsOf } from "./rank-time";
+import { searchWeights } from "./rank-time";
 import { type Search, searchLane, startsWithRoom } from "./search-lane";
 import { wishedHours } from "./time-wishes";
 
 const minuteMs = 60_000;
+const noStarts = { fitting: [], other: [] };
 
 /** The free room that the visit fills best: the one whose gap it leaves the least of. */
 function tightestRoom(input: FindTimesInput, c: Candidate, needMs: number): string | null {
   let best: { id: string; slack: number } | null = null;
   for (const room of input.rooms) {
-    if (room.siteId !== c.siteId) continue;
+    if (room.siteId !== c.siteId || (input.wishes.needsRoom === true && room.meetsNeeds === false)) continue;
     const gap = room.free.find((i) => i.from <= c.startsAt && c.startsAt + needMs <= i.to);
     const slack = gap ? gap.to - gap.from : Number.POSITIVE_INFINITY;
     if (gap && slack < (best?.slack ?? Number.POSITIVE_INFINITY)) best = { id: room.id, slack };
@@ -35,11 +36,13 @@ export function findTimes(input: FindTimesInput): FoundTimes {
     needMs,
     hours: wishedHours(input.wishes),
     clocks: new Map(input.sites.map((x) => [x.id, clockByZone.get(x.zone) ?? []])),
-    weights: weightsOf(input.order ?? []),
+    weights: searchWeights(input),
     tally: { lookedAt: 0, longestFree: 0, byBroken: new Map(), earliestBySite: new Map() },
   };
-  const startable = new Map(input.sites.map((x) => [x.id, startsWithRoom(search, x.id)]));
-  const candidates = input.free.flatMap((lane) => searchLane(search, lane, startable.get(lane.siteId) ?? []));
+  const startable = new Map(input.sites.map((x) => [x.id, startsWithRoom(search, x.id)] as const));
+  const candidates = input.free.flatMap((lane) =>
+    searchLane(search, lane, startable.get(lane.siteId) ?? noStarts),
+  );
   candidates.sort(
     (a, b) => b.score - a.score || a.startsAt - b.startsAt || a.therapistId.localeCompare(b.therapistId),
   );

@@ -1,6 +1,6 @@
 import type { DayClock } from "./day-clock";
 import type { Interval } from "./interval";
-import type { GapLeft, RankConcern, Scores } from "./rank-time";
+import type { GapLeft, RankConcern, Scores, Urgency, Weights } from "./rank-time";
 import type { TimeWishes, WishKind } from "./time-wishes";
 
 export interface FindTimesInput {
@@ -27,6 +27,8 @@ export interface FindTimesInput {
     readonly name: string;
     readonly siteId: string;
     readonly free: readonly Interval[];
+    /** Whether it meets what the patient needs of a room; absent means yes. */
+    readonly meetsNeeds?: boolean;
   }[];
   readonly wishes: TimeWishes;
   /** Therapists who have seen the patient. */
@@ -35,8 +37,10 @@ export interface FindTimesInput {
     readonly visits: number;
     readonly isLast: boolean;
   }[];
-  /** What counts, most first: wish, wait, knows, day where absent. */
+  /** What counts, most first; goes before the practice's own weights. */
   readonly order?: readonly RankConcern[] | undefined;
+  readonly weights?: Weights | undefined;
+  readonly urgency?: Urgency | undefined;
   readonly limit: number;
 }
 

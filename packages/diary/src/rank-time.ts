@@ -18,8 +18,40 @@ export function weightsOf(order: readonly RankConcern[]): Readonly<Record<RankCo
   return { wish: weight("wish"), wait: weight("wait"), knows: weight("knows"), day: weight("day") };
 }
 
-export function totalScore(scores: Scores, weights: Readonly<Record<RankConcern, number>>): number {
-  return rankConcerns.reduce((sum, c) => sum + scores[c] * weights[c], 0);
+export type Weights = Readonly<Record<RankConcern, number>>;
+
+/** What a practice starts with, in parts of a hundred; the simulation in tests/bench keeps them honest. */
+export const usualWeights: Weights = { wish: 40, wait: 15, knows: 30, day: 15 };
+
+export const urgencies = ["routine", "soon", "urgent"] as const;
+export type Urgency = (typeof urgencies)[number];
+const waitTimes: Record<Urgency, number> = { routine: 1, soon: 2, urgent: 5 };
+
+/**
+ * The weights of one search, which add up to 1: the caller's order where there is one, else the practice's own; the
+ * more urgent, the more the wait counts.
+ */
+export function searchWeights(choice: {
+  readonly order?: readonly RankConcern[] | undefined;
+  readonly weights?: Weights | undefined;
+  readonly urgency?: Urgency | undefined;
+}): Weights {
+  const hasOrder = (choice.order?.length ?? 0) > 0;
+  const base = hasOrder ? weightsOf(choice.order ?? []) : (choice.weights ?? usualWeights);
+  const pressed = { ...base, wait: base.wait * waitTimes[choice.urgency ?? "routine"] };
+  const sum = rankConcerns.reduce((all, c) => all + pressed[c], 0);
+  if (!(sum > 0)) return weightsOf([]);
+  const share = (c: RankConcern): number => pressed[c] / sum;
+  return { wish: share("wish"), wait: share("wait"), knows: share("knows"), day: share("day") };
+}
+
+export function totalScore(scores: Scores, weights: Weights): number {
+  return (
+    scores.wish * weights.wish +
+    scores.wait * weights.wait +
+    scores.knows * weights.knows +
+    scores.day * weights.day
+  );
 }
 
 /** 1 for now, falling by a twelfth a day at first; always strictly less for a later time. */
@@ -31,8 +63,8 @@ export function waitScore(minutes: number): number {
  * No time that many minutes on or later can score more than this, however good it is otherwise.
  * @param wish the best wish score that such a time can have
  */
-export function bestScoreAfter(minutes: number, order: readonly RankConcern[], wish = 1): number {
-  return totalScore({ wish, wait: waitScore(minutes), knows: 1, day: 1 }, weightsOf(order));
+export function bestScoreAfter(minutes: number, weights: Weights, wish = 1): number {
+  return totalScore({ wish, wait: waitScore(minutes), knows: 1, day: 1 }, weights);
 }
 
 /** @param visits with this therapist; @param isLast whether they gave the patient's last visit */

@@ -1,6 +1,6 @@
 import type { DayClock } from "./day-clock";
 import type { Candidate, FindTimesInput, Tally } from "./found-times";
-import { type Interval, intersect, union } from "./interval";
+import { type Interval, intersect, subtract, union } from "./interval";
 import {
   dayScore,
   knowsScore,
@@ -18,6 +18,7 @@ import {
   siteBits,
   therapistBits,
   type WishedHours,
+  windowBits,
   wishBit,
 } from "./time-wishes";
 
@@ -47,11 +48,28 @@ function startsBetween(lo: number, hi: number): number[] {
   return starts;
 }
 
-/** When some room of the site can take a visit's start: one interval per run of starts, its end just possible. */
-export function startsWithRoom(s: Search, siteId: string): Interval[] {
-  const ranges = s.input.rooms
-    .filter((r) => r.siteId === siteId)
-    .flatMap((r) => r.free.map((i) => ({ from: i.from, to: i.to - s.needMs + 1 })));
+/** When a visit may start for the rooms' sake: in one that meets the patient's needs, or only in another. */
+export interface RoomStarts {
+  readonly fitting: readonly Interval[];
+  readonly other: readonly Interval[];
+}
+
+/**
+ * When some room of the site can take a visit's start: one interval per run of starts, its end just possible. The two
+ * kinds of rooms are kept apart whether or not they are asked for, so that the same starts are looked at either way.
+ */
+export function startsWithRoom(s: Search, siteId: string): RoomStarts {
+  const here = s.input.rooms.filter((r) => r.siteId === siteId);
+  const fitting = startsIn(
+    s,
+    here.filter((r) => r.meetsNeeds !== false),
+  );
+  const rest = here.filter((r) => r.meetsNeeds === false);
+  return { fitting, other: rest.length === 0 ? [] : subtract(startsIn(s, rest), fitting) };
+}
+
+function startsIn(s: Search, rooms: FindTimesInput["rooms"]): Interval[] {
+  const ranges = rooms.flatMap((r) => r.free.map((i) => ({ from: i.from, to: i.to - s.needMs + 1 })));
   const window = [{ from: s.input.from.getTime(), to: s.input.to.getTime() }];
   return intersect(union(ranges), window);
 }
@@ -65,8 +83,10 @@ function makeCandidate(
   startsAt: number,
   gap: Interval,
 ): Candidate | null {
-  const off = minutesOutside(s.hours, clock.wallOf(startsAt), s.input.durationMinutes);
-  const broken = laneBits | dayBits(s.input.wishes, clock) | (off > 0 ? wishBit.hours : 0);
+  const { wishes, durationMinutes } = s.input;
+  const off = minutesOutside(s.hours, clock.wallOf(startsAt), durationMinutes);
+  const inWindow = windowBits(wishes, { from: startsAt, to: startsAt + durationMinutes * minuteMs });
+  const broken = laneBits | dayBits(wishes, clock) | inWindow | (off > 0 ? wishBit.hours : 0);
   s.tally.lookedAt += 1;
   if (!isAtMostOne(broken)) return null;
   const seen = s.tally.byBroken.get(broken);
@@ -75,6 +95,8 @@ function makeCandidate(
     seen.times += 1;
     if (startsAt < seen.first) Object.assign(seen, { first: startsAt, siteId: lane.siteId });
   }
+  // A room that the patient cannot use is no offer; it only tells what giving up the need would bring.
+  if ((broken & wishBit.needs) !== 0) return null;
   if (broken === 0 && startsAt < (s.tally.earliestBySite.get(lane.siteId) ?? Number.POSITIVE_INFINITY))
     s.tally.earliestBySite.set(lane.siteId, startsAt);
   const left = { before: (startsAt - gap.from) / minuteMs, after: (gap.to - startsAt - s.needMs) / minuteMs };
@@ -89,16 +111,26 @@ function makeCandidate(
 }
 
 /** The best start of each part of the day in every gap of one therapist at one site. */
-export function searchLane(
+export function searchLane(s: Search, lane: FindTimesInput["free"][number], starts: RoomStarts): Candidate[] {
+  const needs = s.input.wishes.needsRoom === true ? wishBit.needs : 0;
+  const best: Candidate[] = [];
+  scanLane(s, lane, starts.fitting, 0, best);
+  if (starts.other.length > 0) scanLane(s, lane, starts.other, needs, best);
+  return best;
+}
+
+function scanLane(
   s: Search,
   lane: FindTimesInput["free"][number],
   startable: readonly Interval[],
-): Candidate[] {
-  const laneBits = siteBits(s.input.wishes, lane.siteId) | therapistBits(s.input.wishes, lane.therapistId);
+  roomBits: number,
+  found: Candidate[],
+): void {
+  const laneBits =
+    roomBits | siteBits(s.input.wishes, lane.siteId) | therapistBits(s.input.wishes, lane.therapistId);
   const clocks = s.clocks.get(lane.siteId) ?? [];
   const known = s.input.seenBy.find((k) => k.therapistId === lane.therapistId);
   const knows = knowsScore(known?.visits ?? 0, known?.isLast ?? false, s.input.seenBy.length > 0);
-  const found: Candidate[] = [];
   let day = 0;
   let run = 0;
   for (const gap of lane.intervals) {
@@ -120,5 +152,4 @@ export function searchLane(
     }
     found.push(...best.values());
   }
-  return found;
 }

@@ -1,5 +1,6 @@
 import type { PlainDateText, PlainTimeText } from "@withy/core/zoned-time";
 import { type DayClock, wallMinutes } from "./day-clock";
+import { contains, type Interval } from "./interval";
 
 export const partsOfDay = ["morning", "afternoon", "evening"] as const;
 export type PartOfDay = (typeof partsOfDay)[number];
@@ -21,13 +22,20 @@ export interface TimeWishes {
   readonly siteIds?: readonly string[] | undefined;
   readonly therapistIds?: readonly string[] | undefined;
   readonly latestOn?: PlainDateText | undefined;
+  /** Exact windows, in milliseconds since the epoch: the visit lies within one of them. */
+  readonly windows?: readonly Interval[] | undefined;
+  /** Whether the room must be one that meets the patient's needs (`meetsNeeds` of a room). */
+  readonly needsRoom?: boolean | undefined;
 }
 
-export const wishKinds = ["days", "hours", "site", "therapist", "latest"] as const;
+export const wishKinds = ["days", "hours", "site", "therapist", "latest", "windows", "needs"] as const;
 export type WishKind = (typeof wishKinds)[number];
 
 /** One bit for each wish, so that a time's broken wishes are one small number. */
-export const wishBit: Record<WishKind, number> = { days: 1, hours: 2, site: 4, therapist: 8, latest: 16 };
+export const wishBit: Record<WishKind, number> = {
+  ...{ days: 1, hours: 2, site: 4, therapist: 8 },
+  ...{ latest: 16, windows: 32, needs: 64 },
+};
 
 export const brokenWishes = (bits: number): WishKind[] => wishKinds.filter((k) => (bits & wishBit[k]) !== 0);
 export const isAtMostOne = (bits: number): boolean => (bits & (bits - 1)) === 0;
@@ -69,4 +77,9 @@ export function minutesOutside(hours: WishedHours, wall: number, durationMinutes
   const late = Math.max(0, wall + durationMinutes - hours.until);
   const part = hours.parts.length === 0 || hours.parts.includes(partOfDay(wall)) ? 0 : 60;
   return Math.max(early, late, part);
+}
+
+export function windowBits(wishes: TimeWishes, visit: Interval): number {
+  const windows = wishes.windows ?? [];
+  return windows.length === 0 || windows.some((w) => contains(w, visit)) ? 0 : wishBit.windows;
 }

@@ -32,6 +32,8 @@ export const bookAppointmentInput = z.strictObject({
     .max(480, "Enter 480 minutes or fewer.")
     .nullish()
     .transform((n) => n ?? null),
+  /** Whether the patient has to reach the room without a step. */
+  needsStepFree: z.boolean().default(false),
   episodeId: idField.nullish().transform((id) => id ?? null),
   deskNote: optionalText(300, "The desk note"),
   /** Why it is booked outside working hours or in blocked time. */

@@ -1,4 +1,6 @@
-import { rankConcerns } from "@withy/diary/rank-time";
+import { isPlainDate } from "@withy/core/plain-date";
+import { equipmentCodes } from "@withy/diary/equipment";
+import { rankConcerns, urgencies, type Weights } from "@withy/diary/rank-time";
 import { partsOfDay, type WishKind } from "@withy/diary/time-wishes";
 import { z } from "zod";
 import { clockTimeField, idField, plainDateField } from "../fields";
@@ -14,6 +16,18 @@ const listOf = <T extends z.ZodType>(item: T) =>
 
 const optionalDate = z.preprocess((v) => (v === "" ? undefined : v), plainDateField.optional());
 const optionalTime = z.preprocess((v) => (v === "" ? undefined : v), clockTimeField.optional());
+
+const exactWindow = z
+  .string()
+  .regex(
+    /^\d{4}-\d{2}-\d{2}T([01]\d|2[0-3]):[0-5]\d\/([01]\d|2[0-3]):[0-5]\d$/,
+    "Enter a window such as 8 December, 10:00 to 12:00.",
+  )
+  .refine((text) => isPlainDate(text.slice(0, 10)), "Enter a real date.")
+  .refine(
+    (text) => text.slice(11, 16) < text.slice(17),
+    "A window ends after it begins. Change one of the times.",
+  );
 
 /** Read as a query string: lists repeat their name. */
 export const findTimesInput = z.strictObject({
@@ -32,7 +46,15 @@ export const findTimesInput = z.strictObject({
   earliestOn: optionalDate,
   /** Absent: eight weeks on. */
   latestOn: optionalDate,
-  /** What counts, most first. */
+  /** Exact windows at the practice's clock: "2026-12-08T10:00/12:00". The visit lies within one of them. */
+  windows: listOf(exactWindow),
+  /** Whether the patient has to reach the room without a step, and what must stand in it. */
+  needsStepFree: z.union([z.boolean(), z.stringbool()]).default(false),
+  equipment: listOf(
+    z.string().refine((code) => equipmentCodes.includes(code), "Choose equipment from the list."),
+  ),
+  urgency: z.enum(urgencies).default("routine"),
+  /** What counts, most first. Absent: the practice's own weights. */
   order: listOf(z.enum(rankConcerns)),
   /** The visit that is to be moved: its own time counts as free. */
   movingId: idField.optional(),
@@ -101,6 +123,8 @@ export interface BookingChoicesView {
     readonly roomKind: "treatment" | "gym" | "video";
     readonly therapistIds: readonly string[];
   }[];
+  /** How the practice ranks times where a search gives no order of its own. */
+  readonly weights: Weights;
   readonly therapists: readonly {
     readonly id: string;
     readonly name: string;

@@ -65,8 +65,11 @@ export const bookAppointment = verb(
   bookAppointmentInput,
   async (ctx, input): Promise<AppointmentView> => {
     requireReach(ctx, "diary.book", input.siteId, "site");
-    const { startsAt, durationMinutes, overrideReason } = input;
-    const wish = { startsAt, durationMinutes, cleanDownMinutes: null, overrideReason, movingId: null };
+    const { startsAt, durationMinutes, overrideReason, needsStepFree } = input;
+    const wish = {
+      ...{ startsAt, durationMinutes, cleanDownMinutes: null, overrideReason },
+      ...{ movingId: null, needsStepFree },
+    };
     const written: VisitRow[] = [];
     const { appointmentId } = await once(ctx, "appointment.book", async (tx) => {
       const plan = await planVisit(tx, input, wish);

@@ -1,7 +1,7 @@
 import { notFound } from "@withy/core/errors";
 import { sql } from "drizzle-orm";
 import type { Context } from "../context";
-import { rowsOf } from "./raw-rows";
+import { jsonList, rowsOf } from "./raw-rows";
 import type { VisitNames } from "./visit-row";
 
 /** Who, what and where of a visit, all of the caller's practice. */
@@ -19,6 +19,7 @@ export interface BookingSetting {
     readonly durationMinutes: number;
     readonly cleanDownMinutes: number;
     readonly roomKind: string;
+    readonly needsEquipment: readonly string[];
     readonly isActive: boolean;
   };
   readonly room: {
@@ -26,6 +27,8 @@ export interface BookingSetting {
     readonly name: string;
     readonly siteId: string;
     readonly kind: string;
+    readonly equipment: readonly string[];
+    readonly isStepFree: boolean;
   } | null;
   readonly patient: { readonly id: string; readonly name: string };
   /** What stands beside the visit once it is booked; the room's name is the chosen room's. */
@@ -49,10 +52,14 @@ interface Row extends VisitNames {
   service_id: string | null;
   duration_minutes: number;
   clean_down_minutes: number;
+  room_kind: string;
+  needs_equipment: string | string[];
   service_active: number;
   room_id: string | null;
   room_site: string;
   kind: string;
+  equipment: string | string[];
+  is_step_free: number;
   patient_id: string | null;
   episode_id: string | null;
 }
@@ -69,9 +76,9 @@ async function readRow(ctx: Context, ids: BookingIds): Promise<Row | undefined> 
       c.given_name, c.preferred_name, c.born_on, c.phone, c.email, c.communication_needs,
       t.id as therapist_id, concat(t.given_name, ' ', t.family_name) as therapist_name,
       (t.is_active and t.is_therapist) as therapist_active, (g.service_id is not null) as gives,
-      v.id as service_id, v.name as service_name, v.duration_minutes, v.clean_down_minutes, v.room_kind,
+      v.id as service_id, v.name as service_name, v.duration_minutes, v.clean_down_minutes, v.room_kind, v.needs_equipment,
       v.is_active as service_active,
-      r.id as room_id, r.name as room_name, r.site_id as room_site, r.kind,
+      r.id as room_id, r.name as room_name, r.site_id as room_site, r.kind, r.equipment, r.is_step_free,
       c.id as patient_id, concat(c.given_name, ' ', c.family_name) as patient_name,
       e.id as episode_id
     from practices x
@@ -123,10 +130,14 @@ export async function loadBookingSetting(ctx: Context, ids: BookingIds): Promise
       durationMinutes: row.duration_minutes,
       cleanDownMinutes: row.clean_down_minutes,
       roomKind: row.room_kind,
+      needsEquipment: jsonList(row.needs_equipment),
       isActive: row.service_active === 1,
     },
     room: row.room_id
-      ? { id: row.room_id, name: row.room_name, siteId: row.room_site, kind: row.kind }
+      ? {
+          ...{ id: row.room_id, name: row.room_name, siteId: row.room_site, kind: row.kind },
+          ...{ equipment: jsonList(row.equipment), isStepFree: row.is_step_free === 1 },
+        }
       : null,
     patient: { id: row.patient_id, name: row.patient_name },
     names: namesIn(row),

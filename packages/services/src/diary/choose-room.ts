@@ -1,6 +1,8 @@
 import { refused } from "@withy/core/errors";
 import { refusal } from "@withy/core/refusal";
+import { equipmentWords } from "@withy/diary/equipment";
 import { overlaps } from "@withy/diary/interval";
+import { type RoomNeeds, roomSuits } from "@withy/diary/room-suits";
 import type { Context } from "../context";
 import { readClaimed, type TherapistDays } from "./therapist-day";
 
@@ -9,19 +11,27 @@ export interface ChosenRoom {
   readonly name: string;
   readonly siteId: string;
   readonly kind: string;
+  readonly equipment: readonly string[];
+  readonly isStepFree: boolean;
 }
 
 /** A visit and its clean-down, in search of a room. */
 export interface RoomWish {
   readonly therapistId: string;
-  readonly kind: string;
+  readonly needs: RoomNeeds;
   readonly startsAt: Date;
   readonly until: Date;
   readonly movingId: string | null;
 }
 
+function noneSuits(site: string, needs: RoomNeeds): string {
+  const equipped = needs.equipment.length > 0 ? ` with ${equipmentWords(needs.equipment)}` : "";
+  const reached = needs.isStepFree ? " that is reached without a step" : "";
+  return `${site} has no room of the kind that this service needs${equipped}${reached}. Choose another site.`;
+}
+
 /**
- * The first room of the kind, in the site's own order, that is free for the whole of a visit and its clean-down; and
+ * The first room that suits, in the site's own order, that is free for the whole of a visit and its clean-down; and
  * whether the therapist is, which the same look at the claims tells.
  * @throws refused `no-room` where none is
  */
@@ -30,8 +40,8 @@ export async function chooseRoom(
   days: TherapistDays,
   wish: RoomWish,
 ): Promise<{ room: ChosenRoom; isTherapistFree: boolean }> {
-  const { therapistId, kind, startsAt, until, movingId } = wish;
-  const rooms = days.frame.rooms.filter((r) => r.kind === kind);
+  const { therapistId, needs, startsAt, until, movingId } = wish;
+  const rooms = days.frame.rooms.filter((r) => roomSuits(r, needs));
   const claimed = await readClaimed(ctx, [therapistId, ...rooms.map((r) => r.id)], startsAt, until, movingId);
   const visit = { from: startsAt.getTime(), to: until.getTime() };
   const blocked = (id: string): boolean =>
@@ -41,7 +51,7 @@ export async function chooseRoom(
   if (room) return { room, isTherapistFree: isUnclaimed(therapistId) };
   const message =
     rooms.length === 0
-      ? `${days.site.name} has no room of the kind that this service needs. Choose another site.`
+      ? noneSuits(days.site.name, needs)
       : `No room at ${days.site.name} is free at that time. Choose another time or site.`;
   throw refused(refusal("no-room", message, "roomId"));
 }

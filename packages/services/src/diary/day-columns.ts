@@ -104,7 +104,9 @@ function column(
   breaks: DayBlock[],
 ): DayColumn {
   const busy = [...visits.filter(holds).map(busyOf), ...absences];
-  const free = intersect(freeIntervals(day.site.id, hours, busy), [{ from: day.from, to: day.clock.endsAt }]);
+  const free = intersect(freeIntervals(day.site.id, hours, busy, day.frame.travel), [
+    { from: day.from, to: day.clock.endsAt },
+  ]);
   return {
     id: who.id,
     name: who.name,

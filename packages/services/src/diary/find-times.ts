@@ -7,6 +7,7 @@ import { and, eq, sql } from "drizzle-orm";
 import type { Context } from "../context";
 import { loadRecord } from "../load-record";
 import { verb } from "../verb";
+import { readFindingWeights } from "./finding-weights";
 import { rowsOf, utc } from "./raw-rows";
 import { type FindTimesQuery, type SeenBy, searchAll, windowOf } from "./search-times";
 import { reachableSites } from "./site-reach";
@@ -78,13 +79,14 @@ export const findTimes = verb("diary.book", findTimesInput, async (ctx, input): 
   const began = performance.now();
   const service = await loadRecord(ctx, services, input.serviceId, "service");
   const window = windowOf(ctx, input);
-  const [siteIds, seenBy, shortestSellableMinutes, therapistIds] = await Promise.all([
+  const [siteIds, seenBy, shortestSellableMinutes, therapistIds, weights] = await Promise.all([
     searchedSites(ctx, input),
     readSeenBy(ctx, input.patientId),
     shortestSellable(ctx),
     therapistsFor(ctx, service.id),
+    readFindingWeights(ctx),
   ]);
-  const settings = { service, siteIds, therapistIds, shortestSellableMinutes, seenBy };
+  const settings = { service, siteIds, therapistIds, shortestSellableMinutes, seenBy, weights };
   const { search, found } = await searchAll(ctx, input, settings, window);
   const { lookedAt, meetingEveryWish, none } = found;
   const tookMs = Math.round(performance.now() - began);

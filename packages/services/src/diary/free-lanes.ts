@@ -1,26 +1,23 @@
 import { sitesWith } from "@withy/core/access/can";
 import { dayOf } from "@withy/core/zoned-time";
-import {
-  type Busy,
-  freeIntervals,
-  openIntervals,
-  withCleanDown,
-  workingIntervals,
-} from "@withy/diary/availability";
-import { dayClocks } from "@withy/diary/day-clock";
+import type { Busy } from "@withy/diary/availability";
 import type { FindTimesInput } from "@withy/diary/found-times";
-import { type Interval, intersect, subtract, union } from "@withy/diary/interval";
+import { freeTime, openSite, roomTime } from "@withy/diary/free-time";
+import { type RoomNeeds, roomSuits } from "@withy/diary/room-suits";
 import { type SQL, sql } from "drizzle-orm";
 import type { Context } from "../context";
-import { type Frame, readFrame } from "./frame";
+import { type Frame, type FramePattern, readFrame } from "./frame";
 import { rowsOf, sqlTime, utc } from "./raw-rows";
 
-interface LanesQuery {
+export interface LanesQuery {
   readonly from: Date;
   readonly to: Date;
   readonly siteIds: readonly string[];
   readonly therapistIds: readonly string[];
-  readonly roomKind: string;
+  /** What the service asks of every room. */
+  readonly room: RoomNeeds;
+  /** What the patient needs besides. */
+  readonly patientNeeds: Omit<RoomNeeds, "kind">;
   readonly cleanDownMinutes: number;
   readonly movingId: string | null;
 }
@@ -42,71 +39,128 @@ const listOf = (ids: readonly string[]): SQL =>
 
 type Lanes = Pick<FindTimesInput, "sites" | "therapists" | "free" | "rooms">;
 
-/** Visits that hold time in the window, by therapist and by room; also the therapists' visits out of the reader's reach. */
-async function readTaken(ctx: Context, q: LanesQuery): Promise<Map<string, Busy[]>> {
-  const taken = new Map<string, Busy[]>();
-  const add = (id: string, busy: Busy): void => {
-    const list = taken.get(id);
-    if (list) list.push(busy);
-    else taken.set(id, [busy]);
-  };
+function grouped(
+  patterns: readonly FramePattern[],
+  key: (pattern: FramePattern) => string,
+): Map<string, FramePattern[]> {
+  const groups = new Map<string, FramePattern[]>();
+  for (const pattern of patterns) {
+    const group = groups.get(key(pattern));
+    if (group) group.push(pattern);
+    else groups.set(key(pattern), [pattern]);
+  }
+  return groups;
+}
+
+/** A visit that began before the window may reach into it by this much at most. */
+const longestMs = 10 * 3_600_000;
+
+/** Visits and classes that hold time; also the therapists' own out of the reader's reach. Part of the bench. */
+export function takenSql(
+  ctx: Pick<Context, "practiceId" | "roles">,
+  q: Pick<LanesQuery, "siteIds" | "therapistIds" | "movingId">,
+  from: Date,
+  to: Date,
+): SQL {
   const ids = listOf(q.siteIds);
-  const earliest = sqlTime(new Date(q.from.getTime() - 24 * 3_600_000));
-  const select = (where: SQL): SQL => sql`
+  const select = (table: SQL, where: SQL): SQL => sql`
     select x.therapist_id as t, x.room_id as r, x.site_id as s, x.starts_at as a, x.ends_at as b, x.clean_down_minutes as c
-    from appointments x where x.practice_id = ${ctx.practiceId} and ${where} and x.state <> 'cancelled'
-      and x.starts_at < ${sqlTime(q.to)} and x.starts_at >= ${earliest}
+    from ${table} x where x.practice_id = ${ctx.practiceId} and ${where} and x.state <> 'cancelled'
+      and x.starts_at < ${sqlTime(to)} and x.starts_at >= ${sqlTime(from)}
       ${q.movingId === null ? sql`` : sql`and x.id <> ${q.movingId}`}`;
-  const here = select(sql`x.site_id in (${ids})`);
-  const away = (): SQL =>
-    select(sql`x.therapist_id in (${listOf(q.therapistIds)}) and x.site_id not in (${ids})`);
-  const reachesAll = sitesWith(ctx.roles, "diary.book") === "all";
-  const rows = await rowsOf<TakenRow>(ctx.db, reachesAll ? here : sql`${here} union all ${away()}`);
-  for (const row of rows) {
-    const busy = { from: utc(row.a), to: utc(row.b) + row.c * 60_000, siteId: row.s };
-    add(row.t, busy);
-    add(row.r, busy);
-  }
-  return taken;
+  const here = sql`x.site_id in (${ids})`;
+  const away = sql`x.therapist_id in (${listOf(q.therapistIds)}) and x.site_id not in (${ids})`;
+  const places = sitesWith(ctx.roles, "diary.book") === "all" ? [here] : [here, away];
+  const tables = [sql`appointments`, sql`class_sessions`];
+  return sql.join(
+    places.flatMap((where) => tables.map((table) => select(table, where))),
+    sql` union all `,
+  );
 }
 
-function addAbsences(taken: Map<string, Busy[]>, frame: Frame): void {
-  for (const a of frame.absences) {
-    const id = a.staffMemberId ?? a.roomId ?? "";
-    taken.set(id, [...(taken.get(id) ?? []), a]);
-  }
-}
+/**
+ * Free time of every therapist and room that a search may use. The frame of the whole window is read once; what is
+ * taken is read as far as the search has to look, and no day twice.
+ */
+export class FreeLanes {
+  private readonly taken = new Map<string, Busy[]>();
+  private readUntil: number;
 
-/** Free time of every therapist and room that a search may use, from two reads. */
-export async function readFreeLanes(ctx: Context, q: LanesQuery): Promise<Lanes> {
-  if (q.siteIds.length === 0 || q.therapistIds.length === 0)
-    return { sites: [], therapists: [], free: [], rooms: [] };
-  const days = { firstDay: dayOf(q.from, ctx.zone), lastDay: dayOf(q.to, ctx.zone) };
-  const [frame, taken] = await Promise.all([
-    readFrame(ctx, { ...days, siteIds: q.siteIds, therapistIds: q.therapistIds }),
-    readTaken(ctx, q),
-  ]);
-  addAbsences(taken, frame);
-  const window: Interval[] = [{ from: q.from.getTime(), to: q.to.getTime() }];
-  const names = new Map(frame.patterns.map((p) => [p.staffMemberId, p.therapistName] as const));
-  const free: Lanes["free"][number][] = [];
-  const rooms: Lanes["rooms"][number][] = [];
-  for (const site of frame.sites) {
-    const clocks = dayClocks(q.from, q.to, site.zone);
-    const open = openIntervals(
-      { siteId: site.id, hours: site.hours, closedOn: new Set(site.closed.keys()) },
-      clocks,
-    );
-    const here = frame.patterns.filter((p) => p.siteId === site.id);
-    for (const therapistId of new Set(here.map((p) => p.staffMemberId))) {
-      const patterns = here.filter((p) => p.staffMemberId === therapistId);
-      const working = withCleanDown(workingIntervals(site.id, patterns, open, clocks), q.cleanDownMinutes);
-      const intervals = intersect(freeIntervals(site.id, working, taken.get(therapistId) ?? []), window);
-      free.push({ therapistId, siteId: site.id, intervals });
+  private constructor(
+    private readonly ctx: Context,
+    private readonly q: LanesQuery,
+    private readonly frame: Frame,
+  ) {
+    this.readUntil = q.from.getTime() - longestMs;
+    for (const a of frame.absences) this.add(a.staffMemberId ?? a.roomId ?? "", a);
+  }
+
+  /** Reads the frame, and at the same time what is taken up to `until`. */
+  static async read(ctx: Context, q: LanesQuery, until: Date): Promise<FreeLanes> {
+    const { siteIds, therapistIds } = q;
+    const days = { firstDay: dayOf(q.from, ctx.zone), lastDay: dayOf(q.to, ctx.zone) };
+    const isEmpty = siteIds.length === 0 || therapistIds.length === 0;
+    const first = new Date(q.from.getTime() - longestMs);
+    const [frame, rows] = await Promise.all([
+      readFrame(ctx, { ...days, siteIds: isEmpty ? [] : siteIds, therapistIds }),
+      isEmpty ? [] : rowsOf<TakenRow>(ctx.db, takenSql(ctx, q, first, until)),
+    ]);
+    const lanes = new FreeLanes(ctx, q, frame);
+    lanes.keep(rows, until);
+    return lanes;
+  }
+
+  private add(id: string, busy: Busy): void {
+    const list = this.taken.get(id);
+    if (list) list.push(busy);
+    else this.taken.set(id, [busy]);
+  }
+
+  private keep(rows: readonly TakenRow[], until: Date): void {
+    for (const row of rows) {
+      const busy = { from: utc(row.a), to: utc(row.b) + row.c * 60_000, siteId: row.s };
+      this.add(row.t, busy);
+      this.add(row.r, busy);
     }
-    for (const room of frame.rooms)
-      if (room.siteId === site.id && room.kind === q.roomKind)
-        rooms.push({ ...room, free: subtract(window, union(taken.get(room.id) ?? [])) });
+    this.readUntil = until.getTime();
   }
-  return { sites: frame.sites, therapists: [...names].map(([id, name]) => ({ id, name })), free, rooms };
+
+  private async readTaken(until: Date): Promise<void> {
+    if (until.getTime() <= this.readUntil || this.frame.sites.length === 0) return;
+    this.keep(await rowsOf(this.ctx.db, takenSql(this.ctx, this.q, new Date(this.readUntil), until)), until);
+  }
+
+  /** Free time from the start of the window up to an instant in it. */
+  async upTo(until: Date): Promise<Lanes> {
+    await this.readTaken(until);
+    const { q, frame } = this;
+    const free: Lanes["free"][number][] = [];
+    const bySite = grouped(frame.patterns, (p) => p.siteId);
+    for (const site of frame.sites) {
+      const opening = { siteId: site.id, hours: site.hours, closedOn: new Set(site.closed.keys()) };
+      const open = openSite(opening, site.zone, q.from, until);
+      const people = grouped(bySite.get(site.id) ?? [], (p) => p.staffMemberId);
+      for (const [therapistId, patterns] of people) {
+        const busy = this.taken.get(therapistId) ?? [];
+        const who = { patterns, busy, givesService: true, cleanDownMinutes: q.cleanDownMinutes };
+        const intervals = freeTime(open, who, frame.travel, q.from, until);
+        free.push({ therapistId, siteId: site.id, intervals });
+      }
+    }
+    const names = new Map(frame.patterns.map((p) => [p.staffMemberId, p.therapistName] as const));
+    const therapists = [...names].map(([id, name]) => ({ id, name }));
+    return { sites: frame.sites, therapists, free, rooms: this.rooms(until) };
+  }
+
+  private rooms(until: Date): Lanes["rooms"] {
+    const { q, frame, taken } = this;
+    const all = { ...q.patientNeeds, kind: q.room.kind };
+    return frame.rooms
+      .filter((room) => roomSuits(room, q.room))
+      .map(({ id, name, siteId, ...facts }) => ({
+        ...{ id, name, siteId },
+        free: roomTime(taken.get(id) ?? [], q.from, until),
+        meetsNeeds: roomSuits(facts, all),
+      }));
+  }
 }

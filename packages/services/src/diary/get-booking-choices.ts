@@ -3,6 +3,7 @@ import { dayOf } from "@withy/core/zoned-time";
 import { rooms, services, serviceTherapists, sites, staffMembers, workingPatterns } from "@withy/db/schema";
 import { and, asc, eq, gte, isNull, or } from "drizzle-orm";
 import { verb } from "../verb";
+import { readFindingWeights } from "./finding-weights";
 import { reachableSites } from "./site-reach";
 
 /** What a booking form offers: everything active, at the sites where this person may book. */
@@ -13,7 +14,7 @@ export const getBookingChoices = verb(
     const { db, practiceId } = ctx;
     const now = ctx.clock.now();
     const reach = new Set(await reachableSites(ctx, "diary.book"));
-    const [siteRows, serviceRows, gives, people, works, roomRows] = await Promise.all([
+    const [siteRows, serviceRows, gives, people, works, roomRows, weights] = await Promise.all([
       db.select().from(sites).where(eq(sites.practiceId, practiceId)).orderBy(asc(sites.position)),
       db
         .select()
@@ -42,9 +43,11 @@ export const getBookingChoices = verb(
           ),
         ),
       db.select().from(rooms).where(eq(rooms.practiceId, practiceId)).orderBy(asc(rooms.position)),
+      readFindingWeights(ctx),
     ]);
     const active = new Set(people.map((p) => p.id));
     return {
+      weights,
       sites: siteRows
         .filter((s) => reach.has(s.id))
         .map((s) => ({ id: s.id, name: s.name, zone: s.zone, today: dayOf(now, s.zone) })),

@@ -19,3 +19,7 @@ export const isoOf = (text: string): string => new Date(utc(text)).toISOString()
 
 /** An instant as a statement's parameter. */
 export const sqlTime = (at: Date): string => at.toISOString().replace("T", " ").replace("Z", "");
+
+/** A JSON column's list of words, which comes as text from a statement that the builder did not write. */
+export const jsonList = (value: string | string[] | null): string[] =>
+  typeof value === "string" ? (JSON.parse(value) as string[]) : (value ?? []);

@@ -4,18 +4,20 @@ import { refusal } from "@withy/core/refusal";
 import { addDays, dayBounds, dayOf, minutesBetween } from "@withy/core/zoned-time";
 import type { services } from "@withy/db/schema";
 import { findTimes as rankTimes } from "@withy/diary/find-times";
-import type { FindTimesInput } from "@withy/diary/found-times";
-import { bestScoreAfter, wishScore } from "@withy/diary/rank-time";
+import type { FindTimesInput, FoundTimes } from "@withy/diary/found-times";
+import { bestScoreAfter, searchWeights, type Weights, wishScore } from "@withy/diary/rank-time";
 import { wishBit } from "@withy/diary/time-wishes";
 import type { z } from "zod";
 import type { Context } from "../context";
-import { readFreeLanes } from "./free-lanes";
+import { FreeLanes } from "./free-lanes";
+import { wishesOf } from "./read-wishes";
 
 export type FindTimesQuery = z.output<typeof findTimesInput>;
 export type SeenBy = FoundTimesView["seenBy"];
 
 const daysAhead = 56;
-const nearDays = 14;
+/** How far a search looks before it asks whether anything later could come among the best. */
+const nearDays = [4, 14];
 /** Looked at beyond the latest date asked for, so that a later date can be proposed. */
 const daysBeyond = 14;
 
@@ -43,68 +45,79 @@ export function windowOf(ctx: Context, input: FindTimesQuery): Window {
   return { from, to: dayBounds(addDays(last, beyond), ctx.zone).to };
 }
 
-function wishesOf(input: FindTimesQuery): FindTimesInput["wishes"] {
-  const { weekdays, partsOfDay, fromTime, untilTime, siteIds, therapistIds, latestOn } = input;
-  return { weekdays, partsOfDay, fromTime, untilTime, siteIds, therapistIds, latestOn };
-}
-
 export interface Search {
   readonly service: typeof services.$inferSelect;
   readonly siteIds: readonly string[];
   readonly therapistIds: readonly string[];
   readonly shortestSellableMinutes: number;
   readonly seenBy: SeenBy;
+  /** The practice's own, for whoever gives no order. */
+  readonly weights: Weights;
 }
 
-async function searchWindow(ctx: Context, input: FindTimesQuery, s: Search, window: Window) {
-  const { durationMinutes, cleanDownMinutes, roomKind } = s.service;
-  const { siteIds, therapistIds, shortestSellableMinutes } = s;
-  const movingId = input.movingId ?? null;
-  const lanes = await readFreeLanes(ctx, {
-    ...window,
-    siteIds,
-    therapistIds,
-    roomKind,
-    cleanDownMinutes,
-    movingId,
-  });
+export interface Searched {
+  readonly search: FindTimesInput;
+  readonly found: FoundTimes;
+}
+
+async function searchUpTo(
+  ctx: Context,
+  input: FindTimesQuery,
+  s: Search,
+  lanes: FreeLanes,
+  window: Window,
+): Promise<Searched> {
+  const { durationMinutes, cleanDownMinutes } = s.service;
+  const { shortestSellableMinutes, weights } = s;
+  const { order, urgency, limit } = input;
   const search: FindTimesInput = {
-    ...{
-      now: ctx.clock.now(),
-      ...window,
-      durationMinutes,
-      cleanDownMinutes,
-      shortestSellableMinutes,
-      ...lanes,
-    },
-    wishes: wishesOf(input),
+    ...{ now: ctx.clock.now(), ...window, durationMinutes, cleanDownMinutes, shortestSellableMinutes },
+    ...(await lanes.upTo(window.to)),
+    wishes: wishesOf(ctx, input),
     seenBy: s.seenBy.map(({ therapistId, visits }, n) => ({ therapistId, visits, isLast: n === 0 })),
-    order: input.order,
-    limit: input.limit,
+    ...{ order, weights, urgency, limit },
   };
   return { search, found: rankTimes(search) };
 }
 
 /** Where a search may stop early, and the best wish score of whatever lies beyond. */
-function nearEnd(ctx: Context, input: FindTimesQuery, window: Window): { at: Date; wishBeyond: number } {
-  const fortnight = addDays(dayOf(window.from, ctx.zone), nearDays);
+function stops(ctx: Context, input: FindTimesQuery, window: Window): { at: Date; wishBeyond: number }[] {
+  const first = dayOf(window.from, ctx.zone);
   const { latestOn } = input;
-  const isByDate = latestOn !== undefined && latestOn < fortnight;
-  const at = dayBounds(isByDate ? addDays(latestOn, 1) : fortnight, ctx.zone).from;
-  return { at, wishBeyond: isByDate ? wishScore(wishBit.latest, wishBit.hours, 0) : 1 };
+  const late = wishScore(wishBit.latest, wishBit.hours, 0);
+  return nearDays
+    .map((days) => {
+      const isByDate = latestOn !== undefined && latestOn < addDays(first, days);
+      const end = isByDate ? addDays(latestOn, 1) : addDays(first, days);
+      return { at: dayBounds(end, ctx.zone).from, wishBeyond: isByDate ? late : 1 };
+    })
+    .filter(({ at }) => window.from < at && at < window.to);
+}
+
+function lanesQuery(input: FindTimesQuery, s: Search, window: Window) {
+  const { roomKind, needsEquipment, cleanDownMinutes } = s.service;
+  return {
+    ...window,
+    ...{ siteIds: s.siteIds, therapistIds: s.therapistIds, cleanDownMinutes },
+    room: { kind: roomKind, equipment: needsEquipment, isStepFree: false },
+    patientNeeds: { equipment: input.equipment, isStepFree: input.needsStepFree },
+    movingId: input.movingId ?? null,
+  };
 }
 
 /**
- * Searches the near days and stops there when nothing later could come among the best; else the whole window. The
- * answer is the same, since the best possible score of a later time is known.
+ * Searches the near days and stops there when nothing later could come among the best; else further, and at last the
+ * whole window. The answer is the same, since the best possible score of a later time is known.
  */
 export async function searchAll(ctx: Context, input: FindTimesQuery, s: Search, window: Window) {
-  const { at, wishBeyond } = nearEnd(ctx, input, window);
-  if (window.from < at && at < window.to) {
-    const near = await searchWindow(ctx, input, s, { from: window.from, to: at });
-    const worst = near.found.times[input.limit - 1];
-    const later = bestScoreAfter(minutesBetween(window.from, at), input.order, wishBeyond);
-    if (near.found.meetingEveryWish > 0 && worst !== undefined && worst.score >= later) return near;
+  const near = stops(ctx, input, window);
+  const lanes = await FreeLanes.read(ctx, lanesQuery(input, s, window), near[0]?.at ?? window.to);
+  const weights = searchWeights({ order: input.order, weights: s.weights, urgency: input.urgency });
+  for (const { at, wishBeyond } of near) {
+    const so = await searchUpTo(ctx, input, s, lanes, { from: window.from, to: at });
+    const worst = so.found.times[input.limit - 1];
+    const later = bestScoreAfter(minutesBetween(window.from, at), weights, wishBeyond);
+    if (so.found.meetingEveryWish > 0 && worst !== undefined && worst.score >= later) return so;
   }
-  return searchWindow(ctx, input, s, window);
+  return searchUpTo(ctx, input, s, lanes, window);
 }

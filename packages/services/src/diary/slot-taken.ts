@@ -4,6 +4,7 @@ import { type AppError, refused } from "@withy/core/errors";
 import { refusal } from "@withy/core/refusal";
 import { addDays, dayOf, timeOf } from "@withy/core/zoned-time";
 import { intersect, overlaps } from "@withy/diary/interval";
+import { type RoomNeeds, roomSuits } from "@withy/diary/room-suits";
 import { sql } from "drizzle-orm";
 import type { Context } from "../context";
 import { type Claim, findHolder } from "./claim-slots";
@@ -12,7 +13,7 @@ import { freeTime, readClaimed, readTherapistDays } from "./therapist-day";
 
 interface Wanted extends Claim {
   readonly site: { readonly id: string; readonly zone: string };
-  readonly roomKind: string;
+  readonly needs: RoomNeeds;
   readonly durationMinutes: number;
   readonly cleanDownMinutes: number;
 }
@@ -59,10 +60,17 @@ async function describeHolder(
 async function nextFree(ctx: Context, w: Wanted): Promise<SlotTakenDetail["nextFree"]> {
   const now = ctx.clock.now();
   const from = new Date(Math.max(w.startsAt.getTime(), now.getTime()));
-  const days = await readTherapistDays(ctx, w.therapistId, w.site, dayOf(from, w.site.zone), daysAhead);
+  const days = await readTherapistDays(
+    ctx,
+    w.therapistId,
+    w.site,
+    dayOf(from, w.site.zone),
+    daysAhead,
+    w.appointmentId,
+  );
   if (!days) return [];
   const until = new Date(`${addDays(dayOf(from, w.site.zone), daysAhead + 1)}T00:00:00Z`);
-  const rooms = days.frame.rooms.filter((r) => r.kind === w.roomKind);
+  const rooms = days.frame.rooms.filter((r) => roomSuits(r, w.needs));
   const claimed = await readClaimed(
     ctx,
     [w.therapistId, ...rooms.map((r) => r.id)],

@@ -28,6 +28,7 @@ export async function readTherapistDays(
   site: { id: string; zone: string },
   day: PlainDateText,
   days = 1,
+  exceptId: string | null = null,
 ): Promise<TherapistDays | null> {
   const dayNames = Array.from({ length: days }, (_, n) => addDays(day, n));
   const frame = await readFrame(ctx, {
@@ -35,6 +36,7 @@ export async function readTherapistDays(
     lastDay: addDays(day, days - 1),
     siteIds: [site.id],
     therapistIds: [therapistId],
+    awayOf: { therapistId, exceptId },
   });
   const found = frame.sites[0];
   if (!found) return null;
@@ -82,5 +84,7 @@ export async function readClaimed(
 /** Free time of a therapist, with room for a clean-down at the end of working time. */
 export function freeTime(days: TherapistDays, taken: readonly Busy[], cleanDownMinutes: number): Interval[] {
   const absences = days.frame.absences.filter((a) => a.staffMemberId !== null);
-  return freeIntervals(days.site.id, withCleanDown(days.working, cleanDownMinutes), [...taken, ...absences]);
+  const busy = [...taken, ...absences, ...days.frame.away];
+  const working = withCleanDown(days.working, cleanDownMinutes);
+  return freeIntervals(days.site.id, working, busy, days.frame.travel);
 }

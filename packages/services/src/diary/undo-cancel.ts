@@ -31,9 +31,10 @@ export const undoCancel = verb("diary.cancel", undoInput, async (ctx, input): Pr
     };
     if (!(await claimSlots(tx, claim))) {
       const site = await loadRecord(tx, sites, before.siteId, "site");
-      const { roomKind } = await loadRecord(tx, services, before.serviceId, "service");
+      const { roomKind, needsEquipment } = await loadRecord(tx, services, before.serviceId, "service");
       const durationMinutes = minutesBetween(startsAt, endsAt);
-      throw await slotTaken(tx, { ...claim, site, roomKind, durationMinutes, cleanDownMinutes });
+      const needs = { kind: roomKind, equipment: needsEquipment, isStepFree: false };
+      throw await slotTaken(tx, { ...claim, site, needs, durationMinutes, cleanDownMinutes });
     }
     const after = await saveAppointment(tx, before, {
       state: undo.to,

@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { promoted, readWishes, relaxed, timesQuery, usualOrder } from "./find-wishes";
+import { orderOf, promoted, readWishes, relaxed, timesQuery } from "./find-wishes";
 
 test("an address fills in the wishes, and nothing that it cannot mean", () => {
   const wishes = readWishes(
@@ -28,6 +28,7 @@ test("the question carries times as the server reads them, and waits for a servi
 
 test("a wish can be given up, and a concern moved forward", () => {
   expect(relaxed("hours")).toEqual({ fromText: "", untilText: "" });
+  const usualOrder = orderOf({ wish: 40, wait: 30, knows: 20, day: 10 });
   expect(promoted(usualOrder, "knows")).toEqual(["wish", "knows", "wait", "day"]);
   expect(promoted(usualOrder, "wish")).toEqual(["wish", "wait", "knows", "day"]);
 });

@@ -1,6 +1,6 @@
 import { shortDate } from "@withy/core/date-words";
 import { isPlainDate } from "@withy/core/plain-date";
-import type { RankConcern } from "@withy/diary/rank-time";
+import type { RankConcern, Urgency, Weights } from "@withy/diary/rank-time";
 import type { WishKind } from "@withy/diary/time-wishes";
 import { readTime } from "./minute-words";
 
@@ -15,10 +15,22 @@ export interface Wishes {
   earliestOn: string | null;
   therapistId: string;
   siteIds: readonly string[];
+  latestText: string;
+  latestOn: string | null;
+  /** Exact windows, as the server reads them: "2026-12-08T10:00/12:00". */
+  windows: readonly string[];
+  /** "step-free" and codes of equipment. */
+  needs: readonly string[];
+  urgency: Urgency;
+  /** Empty: as the practice weighs it. */
   order: readonly RankConcern[];
 }
 
-export const usualOrder: readonly RankConcern[] = ["wish", "wait", "knows", "day"];
+const concerns: readonly RankConcern[] = ["wish", "wait", "knows", "day"];
+
+/** The order that the practice's weights come to. */
+export const orderOf = (weights: Weights): RankConcern[] =>
+  [...concerns].sort((a, b) => weights[b] - weights[a]);
 
 /** The wishes that an address carries: a gap on Today or "book next" on a visit fills them in. */
 export function readWishes(query: URLSearchParams): Wishes {
@@ -33,7 +45,7 @@ export function readWishes(query: URLSearchParams): Wishes {
     earliestOn: day,
     therapistId: query.get("therapist") ?? "",
     siteIds: query.getAll("site"),
-    order: usualOrder,
+    ...{ latestText: "", latestOn: null, windows: [], needs: [], urgency: "routine", order: [] },
   };
 }
 
@@ -49,6 +61,11 @@ export function timesQuery(wishes: Wishes, patientId: string | null) {
     earliestOn: wishes.earliestOn,
     therapistIds: wishes.therapistId ? [wishes.therapistId] : [],
     siteIds: wishes.siteIds,
+    latestOn: wishes.latestOn,
+    windows: wishes.windows,
+    needsStepFree: wishes.needs.includes("step-free"),
+    equipment: wishes.needs.filter((code) => code !== "step-free"),
+    urgency: wishes.urgency,
     order: wishes.order,
   };
 }
@@ -65,7 +82,11 @@ export function relaxed(wish: WishKind): Partial<Wishes> {
     case "therapist":
       return { therapistId: "" };
     case "latest":
-      return {};
+      return { latestText: "", latestOn: null };
+    case "windows":
+      return { windows: [] };
+    case "needs":
+      return { needs: [] };
   }
 }
 

@@ -49,5 +49,7 @@ export function slotTaken(error: unknown): SlotTakenDetail | null {
 
 /** Whether a reason would let it through all the same. */
 export function givesWayToReason(error: unknown): boolean {
-  return error instanceof ApiError && ["outside-hours", "blocked"].includes(error.problem.kind);
+  return (
+    error instanceof ApiError && ["outside-hours", "blocked", "too-far-apart"].includes(error.problem.kind)
+  );
 }

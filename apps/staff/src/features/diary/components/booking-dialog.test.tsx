@@ -7,6 +7,7 @@ import { wantedTime } from "../wanted-time";
 import { BookingDialog } from "./booking-dialog";
 
 const choices: BookingChoicesView = {
+  weights: { wish: 40, wait: 15, knows: 30, day: 15 },
   sites: [{ id: "saltgate", name: "Saltgate", zone: "Europe/London", today: "2026-12-01" }],
   services: [
     {

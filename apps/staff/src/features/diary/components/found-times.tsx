@@ -118,7 +118,7 @@ interface WhyNoneProps {
 
 function WhyNone({ none, isEmpty, onRelax }: WhyNoneProps) {
   const { relax } = none;
-  const action = relax && relax.wish !== "latest" && (
+  const action = relax && (
     <Button size="small" onClick={() => onRelax(relax.wish)}>
       Look without that wish
     </Button>

@@ -11,8 +11,9 @@ import { Select } from "@withy/ui/select";
 import { TextInput } from "@withy/ui/text-input";
 import Link from "next/link";
 import { findPatients } from "@/api/find-patients";
-import { promoted, type Wishes } from "../find-wishes";
+import { orderOf, promoted, type Wishes } from "../find-wishes";
 import { readTime } from "../minute-words";
+import { MoreWishes } from "./more-wishes";
 
 export interface WishesFormProps {
   choices: BookingChoicesView;
@@ -138,7 +139,11 @@ export function WishesForm({
           />
         </div>
       )}
-      <Order order={wishes.order} onChange={(order) => onChange({ order })} />
+      <MoreWishes wishes={wishes} onChange={onChange} today={today} />
+      <Order
+        order={wishes.order.length > 0 ? wishes.order : orderOf(choices.weights)}
+        onChange={(order) => onChange({ order })}
+      />
     </form>
   );
 }
