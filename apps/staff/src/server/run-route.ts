@@ -15,6 +15,8 @@ export interface RouteOptions<O> {
   status?: 200 | 201 | 202;
   /** For answers that are no JSON: a PDF, a redirect. */
   respond?: (answer: O, ctx: Context) => Response | Promise<Response>;
+  /** Input that a browser sends in a header of its own accord, by the name of the field. */
+  fromHeaders?: Readonly<Record<string, string>>;
 }
 
 const largestBody = 1_000_000;
@@ -36,7 +38,8 @@ export function route<O>(run: Verb<any, O>, options: RouteOptions<O> = {}): Rout
           "unauthenticated",
           "Your session has ended. Sign in again; what you typed stays on this page.",
         );
-      const input = { ...(await readInput(request)), ...(await params) };
+      const sent = readHeaders(request, options.fromHeaders ?? {});
+      const input = { ...(await readInput(request)), ...sent, ...(await params) };
       const answer = await run(session.context, input);
       if (options.respond) return await options.respond(answer, session.context);
       return Response.json(answer ?? null, {
@@ -71,6 +74,15 @@ function readKey(request: Request): string | null {
   if (!/^[\w-]{8,64}$/.test(key))
     throw new AppError("invalid", "The Idempotency-Key header must be 8 to 64 letters, digits or dashes.");
   return key;
+}
+
+function readHeaders(request: Request, names: Readonly<Record<string, string>>): Record<string, string> {
+  return Object.fromEntries(
+    Object.entries(names).flatMap(([field, header]) => {
+      const value = request.headers.get(header);
+      return value === null ? [] : [[field, value]];
+    }),
+  );
 }
 
 async function readInput(request: NextRequest): Promise<Record<string, unknown>> {

@@ -75,6 +75,7 @@ export const apiTable: Readonly<Record<string, Verb<any, unknown>>> = {
   "GET /api/diary/day": diary.getDiaryDay,
   "DELETE /api/diary/feed": diary.revokeCalendarFeed,
   "POST /api/diary/feed": diary.makeCalendarFeed,
+  "GET /api/diary/live": diary.getDiaryWatch,
   "GET /api/diary/pulse": diary.getDiaryPulse,
   "PUT /api/diary/settings": diary.changeDiarySettings,
   "GET /api/diary/therapists/[therapistId]/week": diary.getTherapistWeek,
