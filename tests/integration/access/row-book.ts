@@ -1,6 +1,7 @@
 import { emptyProgramme } from "@withy/clinical/programmes/new-item";
 import { newId } from "@withy/core/ids";
 import {
+  apiKeys,
   cardAttempts,
   invoiceLines,
   invoices,
@@ -114,7 +115,14 @@ export async function writeRowBook(practice: TestPractice): Promise<RowBook> {
   await db.insert(sessions).values(session);
   const job = { id: newId(), practiceId, kind: "billing.draft-visits", input: {}, state: "done" as const };
   await db.insert(jobs).values({ ...job, dueAt: now, createdAt: now });
+  const apiKey = {
+    ...key(),
+    name: "Trial",
+    keyHash: Buffer.from(newId().replaceAll("-", "").repeat(2), "hex"),
+  };
+  await db.insert(apiKeys).values({ ...apiKey, createdAt: now, createdBy: staff.owner.id });
   return {
+    apiKeyId: apiKey.id,
     patientId: patient.id,
     episodeId: episode.id,
     appointmentId: visit.id,

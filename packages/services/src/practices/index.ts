@@ -1,3 +1,4 @@
+export { listApiKeys, makeApiKey, revokeApiKey } from "./api-keys";
 export { changePassword } from "./change-password";
 export { changeRoles } from "./change-roles";
 export { chooseDeskSite } from "./choose-desk-site";

@@ -6,9 +6,12 @@ import type {
   NewCalendarFeedView,
 } from "@withy/contracts/diary";
 import type {
+  ApiKeyRow,
   ChangeRolesInput,
   DeactivatedView,
   InviteStaffMemberInput,
+  MakeApiKeyInput,
+  NewApiKeyView,
   SessionRow,
   StaffRow,
 } from "@withy/contracts/practices";
@@ -52,3 +55,9 @@ export const changeDiarySettings = (input: ChangeDiarySettingsInput) =>
 export const makeCalendarFeed = () => write<NewCalendarFeedView>("POST", "/api/diary/feed");
 
 export const revokeCalendarFeed = () => write<MyCalendarFeedView>("DELETE", "/api/diary/feed");
+
+export const makeApiKey = (input: MakeApiKeyInput) =>
+  write<NewApiKeyView>("POST", "/api/practices/api-keys", input);
+
+export const revokeApiKey = (apiKeyId: string) =>
+  write<ApiKeyRow[]>("DELETE", `/api/practices/api-keys/${apiKeyId}`);

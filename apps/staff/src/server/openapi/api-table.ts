@@ -107,6 +107,8 @@ export const apiTable: Readonly<Record<string, Verb<any, unknown>>> = {
   "GET /api/practices/settings": practices.getPracticeSettings,
   "GET /api/practices/sites": practices.listSites,
   "GET /api/practices/staff": practices.listStaff,
+  "POST /api/practices/api-keys": practices.makeApiKey,
+  "DELETE /api/practices/api-keys/[apiKeyId]": practices.revokeApiKey,
   "POST /api/practices/staff": practices.inviteStaffMember,
   "POST /api/practices/staff/[staffMemberId]/deactivate": practices.deactivateStaff,
   "POST /api/practices/staff/[staffMemberId]/invite": practices.sendInvitationAgain,

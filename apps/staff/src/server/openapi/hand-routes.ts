@@ -25,6 +25,31 @@ const signIn = (summary: string): Json => ({
   responses: { "2XX": json("The library's own answer."), "3XX": { description: "The next step." } },
 });
 
+const fhir = (description: string): Json => ({
+  description,
+  content: { "application/fhir+json": { schema: { type: "object" } } },
+});
+
+const fhirType = {
+  name: "type",
+  in: "path",
+  required: true,
+  schema: { enum: ["Appointment", "Slot", "Schedule"] },
+};
+
+const fhirRefusals: Json = {
+  "401": fhir("No key, a wrong one or one that was ended: an OperationOutcome."),
+  "404": fhir("No such resource in this practice: an OperationOutcome."),
+  "429": fhir("Asked too often: an OperationOutcome, and Retry-After."),
+};
+
+const query = (name: string, description: string): Json => ({
+  name,
+  in: "query",
+  description,
+  schema: { type: "string" },
+});
+
 /** Routes that are no single verb: each is told by hand, and says why it asks for no session. */
 export const handRoutes: Readonly<Record<string, Json>> = {
   "GET /api/auth/[...nextauth]": signIn("Reads of the sign-in library"),
@@ -64,6 +89,43 @@ export const handRoutes: Readonly<Record<string, Json>> = {
       "404": problem("not-found"),
       "429": text("Asked too often. Retry-After says when to ask again."),
     },
+  },
+  "GET /api/fhir/r4/metadata": {
+    tags: ["diary"],
+    summary: "What the FHIR R4 server can do",
+    security: [],
+    responses: { "200": fhir("A CapabilityStatement.") },
+  },
+  "GET /api/fhir/r4/[type]": {
+    tags: ["diary"],
+    summary: "Searches the diary by FHIR R4",
+    description:
+      "For programs with a key that the owner makes under Settings. Patients stand with initials only.",
+    security: [{ key: [] }],
+    parameters: [
+      fhirType,
+      query("date", "A date or an instant, with eq, ge, gt, le or lt before it; may come twice."),
+      query("start", "The same for a Slot."),
+      query("practitioner", "Practitioner/ and an id; several with commas."),
+      query("location", "Location/ and an id; several with commas."),
+      query("schedule", "Schedule/ and an id, for Slot."),
+      query("status", "Codes of FHIR R4, several with commas; not for Schedule."),
+      query("_count", "How many at most, 1 to 200; 50 where left out."),
+      query("_after", "Where the page before ended, as its next link says."),
+      query("_format", "json."),
+    ],
+    responses: {
+      "200": fhir("A Bundle of type searchset, with links to itself and to the next page."),
+      "400": fhir("What cannot be asked, and what to send instead: an OperationOutcome."),
+      ...fhirRefusals,
+    },
+  },
+  "GET /api/fhir/r4/[type]/[id]": {
+    tags: ["diary"],
+    summary: "One Appointment, Slot or Schedule",
+    security: [{ key: [] }],
+    parameters: [fhirType, inPath("id", "The resource's id, as a search gave it.")],
+    responses: { "200": fhir("The resource."), ...fhirRefusals },
   },
   "GET /api/openapi.json": {
     tags: ["practices"],

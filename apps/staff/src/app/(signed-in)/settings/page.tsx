@@ -1,10 +1,11 @@
 import "@/features/practices/practices.css";
 import { getDiarySettings } from "@withy/services/diary";
-import { getPracticeSettings, listStaff } from "@withy/services/practices";
+import { getPracticeSettings, listApiKeys, listStaff } from "@withy/services/practices";
 import { ButtonLink } from "@withy/ui/button";
 import { Page, PageBody, PageTitle } from "@withy/ui/page";
 import type { Metadata } from "next";
 import Link from "next/link";
+import { ApiKeys } from "@/features/practices/components/api-keys";
 import { PracticeSettings } from "@/features/practices/components/practice-settings";
 import { ReminderSettings } from "@/features/practices/components/reminder-settings";
 import { StaffList } from "@/features/practices/components/staff-list";
@@ -14,10 +15,11 @@ export const metadata: Metadata = { title: "Settings" };
 
 export default async function SettingsPage() {
   const ctx = await requireContext("practice.manage");
-  const [settings, staff, diary] = await Promise.all([
+  const [settings, staff, diary, keys] = await Promise.all([
     getPracticeSettings(ctx, {}),
     listStaff(ctx, {}),
     getDiarySettings(ctx, {}),
+    listApiKeys(ctx, {}),
   ]);
   return (
     <Page>
@@ -39,6 +41,7 @@ export default async function SettingsPage() {
         />
         <ReminderSettings first={diary} zone={ctx.zone} />
         <PracticeSettings settings={settings} />
+        <ApiKeys first={keys} zone={ctx.zone} />
       </PageBody>
     </Page>
   );

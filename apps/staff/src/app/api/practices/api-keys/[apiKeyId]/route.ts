@@ -1,0 +1,4 @@
+import { revokeApiKey } from "@withy/services/practices";
+import { route } from "@/server/run-route";
+
+export const DELETE = route(revokeApiKey);
