@@ -57,6 +57,8 @@ const known: Readonly<Record<string, unknown>> = {
   preferredName: null,
   amountPence: 100,
   order: undefined,
+  windows: undefined,
+  equipment: undefined,
   cursor: undefined,
 };
 
