@@ -61,6 +61,7 @@ test("a read needs no permission to write", () => {
     "findTimes",
     "getBookingChoices",
     "getDraftingJob",
+    "getFindingWeights",
     "getPracticeSettings",
     "listProducts",
     "listStaff",

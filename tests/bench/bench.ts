@@ -3,6 +3,7 @@ import mysql from "mysql2/promise";
 import { startBareServer } from "./bare-server";
 import { measureStreams, streamCount } from "./live-streams";
 import { scriptBytes } from "./page-weight";
+import { rowsQuery } from "./rows-query";
 import { openSession } from "./signed-in";
 import { p50, percentile, type Timed, timeInTurn } from "./timing";
 import { large, small, type VolumePlan, volumeId, weeksAhead } from "./volume-plan";
@@ -82,6 +83,14 @@ const find = (size: "large" | "small") =>
     cookies[size],
   );
 
+const eightWeeksOn = addDays(today, 56);
+const wide = (size: "large" | "small") =>
+  fetchJson(
+    `${apps[size]}/api/diary/times?serviceId=${volumeId("service", 1)}&latestOn=${eightWeeksOn}`,
+    cookies[size],
+  );
+const bareRows = rowsQuery(today, eightWeeksOn);
+
 console.log(`\nReading, ${rounds} rounds in turn`);
 const reading = await timeInTurn(
   {
@@ -93,6 +102,13 @@ const reading = await timeInTurn(
     "patient search, 2,000 patients": (round) => search("small", round),
     "find a time, 1,000,000 appointments": () => find("large"),
     "find a time, 10,000 appointments": () => find("small"),
+    "find a time, 12 sites, 8 weeks": () => wide("large"),
+    "bare fetch of the rows of those 8 weeks": () => connections.large.query(bareRows),
+    "the day of two sites, 25 therapists": () =>
+      fetchJson(
+        `${apps.large}/api/diary/day?day=${busyDay}&siteIds=${siteId}&siteIds=${volumeId("site", 1)}`,
+        cookies.large,
+      ),
   },
   rounds,
   30,
@@ -123,6 +139,16 @@ judge(
   1.3,
   "x",
 );
+
+const late = (name: string) => percentile(reading[name]?.taken ?? [], 0.95);
+judge("find a time, 12 sites, 8 weeks, p95", late("find a time, 12 sites, 8 weeks"), 150, "ms");
+judge(
+  "find a time, 12 sites, against the bare fetch",
+  at("find a time, 12 sites, 8 weeks") / at("bare fetch of the rows of those 8 weeks"),
+  3,
+  "x",
+);
+judge("the day of 25 therapists, p95", late("the day of two sites, 25 therapists"), 30, "ms");
 
 console.log(`\nBooking, ${rounds} rounds in turn, every commit on disk`);
 const firstFreeDay = weekday(addDays(today, 80));

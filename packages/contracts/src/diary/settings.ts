@@ -31,3 +31,20 @@ export interface DiarySettingsView {
   readonly hasNamesInFeed: boolean;
   readonly version: number;
 }
+
+const weightField = z
+  .int("Enter a whole number from 0 to 100.")
+  .min(0, "Enter 0 or more.")
+  .max(100, "Enter 100 or less.");
+const weightsField = z
+  .strictObject({ wish: weightField, wait: weightField, knows: weightField, day: weightField })
+  .refine((w) => w.wish + w.wait + w.knows + w.day > 0, "Give at least one of the four some weight.");
+
+export const getFindingWeightsInput = z.strictObject({});
+
+export const changeFindingWeightsInput = z.strictObject({
+  weights: weightsField,
+  /** The weights that the screen saw. */
+  before: weightsField,
+});
+export type ChangeFindingWeightsInput = z.input<typeof changeFindingWeightsInput>;

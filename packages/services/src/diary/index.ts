@@ -1,12 +1,14 @@
 export { bookAppointment } from "./book-appointment";
 export { cancelAppointment } from "./cancel-appointment";
 export { changeDiarySettings } from "./change-diary-settings";
+export { changeFindingWeights } from "./change-finding-weights";
 export { findTimes } from "./find-times";
 export { getAppointment } from "./get-appointment";
 export { getBookingChoices } from "./get-booking-choices";
 export { getDiaryDay } from "./get-diary-day";
 export { getDiaryPulse } from "./get-diary-pulse";
 export { getDiarySettings } from "./get-diary-settings";
+export { getFindingWeights } from "./get-finding-weights";
 export { getMyCalendarFeed } from "./get-my-calendar-feed";
 export { getTherapistWeek } from "./get-therapist-week";
 export { listRecentChanges } from "./list-recent-changes";

@@ -1,6 +1,7 @@
 import type { AuditPage, ListAuditInput } from "@withy/contracts/audit";
 import type {
   ChangeDiarySettingsInput,
+  ChangeFindingWeightsInput,
   DiarySettingsView,
   MyCalendarFeedView,
   NewCalendarFeedView,
@@ -15,6 +16,7 @@ import type {
   SessionRow,
   StaffRow,
 } from "@withy/contracts/practices";
+import type { Weights } from "@withy/diary/rank-time";
 import { get, write } from "@/api/request";
 
 export const listMySessions = (signal?: AbortSignal) =>
@@ -61,3 +63,6 @@ export const makeApiKey = (input: MakeApiKeyInput) =>
 
 export const revokeApiKey = (apiKeyId: string) =>
   write<ApiKeyRow[]>("DELETE", `/api/practices/api-keys/${apiKeyId}`);
+
+export const changeFindingWeights = (input: ChangeFindingWeightsInput) =>
+  write<Weights>("PUT", "/api/diary/finding-weights", input);
