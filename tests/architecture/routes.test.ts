@@ -67,5 +67,7 @@ test("a read needs no permission to write", () => {
     "listStaff",
     "listToIssue",
     "listUnsignedNotes",
+    "previewCourse",
+    "previewExtension",
   ]);
 });

@@ -206,7 +206,13 @@ describe("Europe/London, by the time zone database (luxon 3.7.2 as the second op
     ["2026-10-20", ["2026-10-20T08:00", "2026-10-27T09:00"]],
     ["2027-03-23", ["2027-03-23T09:00", "2027-03-30T08:00"]],
   ])("weekly at 09:00 from %s", (firstDay, expected) => {
-    const visits = seriesOf({ firstDay, time: "09:00", zone, visits: 2, everyWeeks: 1 });
+    const visits = seriesOf({
+      firstDay,
+      time: "09:00",
+      zone,
+      visits: 2,
+      rhythm: { kind: "interval", days: 7 },
+    });
     expect(visits.map((v) => ("startsAt" in v ? iso(v.startsAt) : "refused"))).toEqual(expected);
   });
 

@@ -2,6 +2,7 @@
 export const auditSubjects = [
   "patient",
   "appointment",
+  "course",
   "episode",
   "note",
   "measure-record",

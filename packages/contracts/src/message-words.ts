@@ -7,13 +7,18 @@ export const appointmentTemplates = [
 ] as const;
 export type AppointmentTemplate = (typeof appointmentTemplates)[number];
 
+/** Templates of the messages about the visits of a course, told together. */
+export const courseTemplates = ["course-booked", "course-moved", "course-cancelled"] as const;
+export type CourseTemplate = (typeof courseTemplates)[number];
+
 export const accountTemplates = ["password-reset", "staff-invitation"] as const;
 export type AccountTemplate = (typeof accountTemplates)[number];
 
-export type MessageTemplate = AppointmentTemplate | AccountTemplate | "letter-waiting";
+export type MessageTemplate = AppointmentTemplate | CourseTemplate | AccountTemplate | "letter-waiting";
 
 export const messageTemplates: readonly MessageTemplate[] = [
   ...appointmentTemplates,
+  ...courseTemplates,
   ...accountTemplates,
   "letter-waiting",
 ];
@@ -23,6 +28,9 @@ export const messageTemplateWords: Record<MessageTemplate, string> = {
   "booking-moved": "Appointment moved",
   "booking-cancelled": "Appointment cancelled",
   "visit-reminder": "Reminder",
+  "course-booked": "Course booked",
+  "course-moved": "Course moved",
+  "course-cancelled": "Rest of a course cancelled",
   "password-reset": "New password",
   "staff-invitation": "Invitation",
   "letter-waiting": "Letter",

@@ -3,6 +3,7 @@ import { newId } from "@withy/core/ids";
 import {
   apiKeys,
   cardAttempts,
+  courses,
   invoiceLines,
   invoices,
   jobs,
@@ -31,6 +32,20 @@ export async function writeRowBook(practice: TestPractice): Promise<RowBook> {
   const episode = await addEpisode(practice, patient.id);
   const at = { patientId: patient.id, day: "2026-12-03" };
   const visit = await addAppointment(practice, { ...at, time: "09:00" });
+  const course = {
+    ...key(),
+    patientId: patient.id,
+    serviceId: practice.services.followUp.id,
+    siteId: sites.saltgate.id,
+    therapistId: staff.therapist.id,
+    rhythm: { kind: "interval" as const, days: 7 },
+    startTime: "11:00",
+    plannedVisits: 1,
+    createdAt: now,
+    createdBy: staff.receptionist.id,
+  };
+  await db.insert(courses).values(course);
+  await addAppointment(practice, { ...at, time: "11:00", values: { courseId: course.id } });
   const noted = await addAppointment(practice, { ...at, time: "10:00", values: { episodeId: episode.id } });
   const record = { episodeId: episode.id, patientId: patient.id };
   const note = {
@@ -127,6 +142,7 @@ export async function writeRowBook(practice: TestPractice): Promise<RowBook> {
     episodeId: episode.id,
     appointmentId: visit.id,
     movingId: visit.id,
+    courseId: course.id,
     noteId: note.id,
     replaces: measure.id,
     programmeId: programme.id,

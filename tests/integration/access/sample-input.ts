@@ -21,6 +21,9 @@ interface Schema {
 const known: Readonly<Record<string, unknown>> = {
   startsAt: "2026-12-08T10:15",
   day: "2026-12-08",
+  firstDay: "2026-12-08",
+  startTime: "10:15",
+  changes: [],
   from: undefined,
   until: undefined,
   month: "2026-11",

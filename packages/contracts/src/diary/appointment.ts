@@ -87,6 +87,8 @@ export interface AppointmentView {
   };
   readonly patient: AppointmentPatient;
   readonly episodeId: string | null;
+  /** The course that it was booked with, where it was. */
+  readonly courseId: string | null;
   /** Instants as ISO 8601 in UTC. */
   readonly startsAt: string;
   readonly endsAt: string;

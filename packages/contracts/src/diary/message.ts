@@ -26,3 +26,30 @@ export const appointmentMessagePayload = z.strictObject({
   at: z.iso.datetime(),
 });
 export type AppointmentMessagePayload = z.infer<typeof appointmentMessagePayload>;
+
+/** What an outbox row about a course carries: the visits that one act booked, moved or cancelled. */
+export const courseMessagePayload = z.strictObject({
+  courseId: idField,
+  zone: z.string(),
+  practice: z.string(),
+  practiceEmail: z.string(),
+  contactLines: z.array(z.string()),
+  phone: z.string(),
+  attendee: z.strictObject({ name: z.string(), email: z.string() }),
+  greetingName: z.string(),
+  noticeHours: z.int(),
+  at: z.iso.datetime(),
+  visits: z
+    .array(
+      z.strictObject({
+        appointmentId: idField,
+        version: z.int().positive(),
+        startsAt: z.iso.datetime(),
+        endsAt: z.iso.datetime(),
+        place: z.string(),
+        withWhom: z.string(),
+      }),
+    )
+    .min(1),
+});
+export type CourseMessagePayload = z.infer<typeof courseMessagePayload>;

@@ -1,9 +1,12 @@
 import ical, {
   ICalAttendeeRole,
   ICalAttendeeStatus,
+  type ICalCalendar,
   ICalCalendarMethod,
   ICalEventStatus,
 } from "ical-generator";
+
+const prodId = { company: "Withy", product: "Withy", language: "EN" };
 
 export interface CalendarAppointment {
   readonly id: string;
@@ -34,7 +37,25 @@ export interface CalendarFile {
  */
 export function appointmentCalendar(appointment: CalendarAppointment, isCancelled: boolean): CalendarFile {
   const method = isCancelled ? ICalCalendarMethod.CANCEL : ICalCalendarMethod.REQUEST;
-  const calendar = ical({ method, prodId: { company: "Withy", product: "Withy", language: "EN" } });
+  const calendar = ical({ method, prodId });
+  addEvent(calendar, appointment, isCancelled);
+  return { content: calendar.toString(), method: isCancelled ? "CANCEL" : "REQUEST" };
+}
+
+/**
+ * One file for several appointments. An invitation may speak of one event only (RFC 5546), so these are published;
+ * each keeps the identity under which a later move or cancellation of it alone is told.
+ */
+export function publishedCalendar(
+  appointments: readonly CalendarAppointment[],
+  isCancelled: boolean,
+): string {
+  const calendar = ical({ method: ICalCalendarMethod.PUBLISH, prodId });
+  for (const appointment of appointments) addEvent(calendar, appointment, isCancelled);
+  return calendar.toString();
+}
+
+function addEvent(calendar: ICalCalendar, appointment: CalendarAppointment, isCancelled: boolean): void {
   const event = calendar.createEvent({
     id: `appointment-${appointment.id}@withy`,
     sequence: appointment.version,
@@ -54,7 +75,6 @@ export function appointmentCalendar(appointment: CalendarAppointment, isCancelle
     role: ICalAttendeeRole.REQ,
     status: ICalAttendeeStatus.ACCEPTED,
   });
-  return { content: calendar.toString(), method: isCancelled ? "CANCEL" : "REQUEST" };
 }
 
 function capital(text: string): string {

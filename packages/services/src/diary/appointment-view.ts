@@ -61,6 +61,7 @@ export function appointmentView(ctx: Context, row: VisitRow, around: Surrounding
     service: { id: row.service_id, name: row.service_name, kind: row.service_kind },
     patient: patientOf(row, around.alerts),
     episodeId: row.episode_id,
+    courseId: row.course_id,
     startsAt: startsAt.toISOString(),
     endsAt: endsAt.toISOString(),
     durationMinutes: (endsAt.getTime() - startsAt.getTime()) / 60_000,

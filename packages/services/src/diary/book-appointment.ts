@@ -1,8 +1,6 @@
 import { type AppointmentView, bookAppointmentInput } from "@withy/contracts/diary";
-import { newId } from "@withy/core/ids";
 import { appointments } from "@withy/db/schema";
 import { writeTogether } from "@withy/db/write-together";
-import type { z } from "zod";
 import type { Context } from "../context";
 import { messageWrite } from "../messaging";
 import { once } from "../once";
@@ -11,35 +9,11 @@ import { verb } from "../verb";
 import { readAppointment, viewVisit } from "./appointment-view";
 import type { AppointmentRow } from "./change-appointment";
 import { claimWrite, isSlotTaken } from "./claim-slots";
+import { newVisit } from "./new-visit";
 import { claimOf, planTaken, planVisit, type VisitPlan } from "./plan-visit";
 import { changeWrites } from "./record-change";
 import { visitMessage } from "./send-visit-message";
 import { newVisitRow, type VisitRow } from "./visit-row";
-
-type Input = z.output<typeof bookAppointmentInput>;
-
-function newRow(ctx: Context, input: Input, plan: VisitPlan): AppointmentRow {
-  const { siteId, therapistId, patientId, serviceId, episodeId, deskNote, overrideReason } = input;
-  const { startsAt, endsAt, cleanDownMinutes } = plan;
-  const now = ctx.clock.now();
-  return {
-    ...{ practiceId: ctx.practiceId, id: newId(), siteId, therapistId, roomId: plan.room.id, patientId },
-    ...{
-      serviceId,
-      episodeId,
-      courseId: null,
-      startsAt,
-      endsAt,
-      cleanDownMinutes,
-      state: "booked",
-      deskNote,
-      overrideReason,
-    },
-    ...{ arrivedAt: null, sessionStartedAt: null, sessionEndedAt: null },
-    ...{ cancelledAt: null, cancelledBy: null, cancelReason: null, isLateCancellation: false },
-    ...{ version: 1, createdAt: now, createdBy: ctx.staffMemberId, updatedAt: now },
-  };
-}
 
 /** Writes the visit, its claims, its history and its message in one journey. @throws refused `slot-taken` */
 async function writeVisit(tx: Context, row: AppointmentRow, plan: VisitPlan): Promise<VisitRow> {
@@ -73,7 +47,7 @@ export const bookAppointment = verb(
     const written: VisitRow[] = [];
     const { appointmentId } = await once(ctx, "appointment.book", async (tx) => {
       const plan = await planVisit(tx, input, wish);
-      const row = newRow(tx, input, plan);
+      const row = newVisit(tx, input, plan);
       written.push(await writeVisit(tx, row, plan));
       return { appointmentId: row.id };
     });

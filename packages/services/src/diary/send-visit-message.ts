@@ -5,7 +5,8 @@ import { enqueueMessage, type OutgoingMessage } from "../messaging";
 import { isoOf, utc } from "./raw-rows";
 import { readVisitRow, type VisitRow } from "./visit-row";
 
-function addressOf(row: VisitRow): string {
+/** Site and address in one line. */
+export function addressOf(row: VisitRow): string {
   const lines = (
     typeof row.address_lines === "string" ? JSON.parse(row.address_lines) : row.address_lines
   ) as string[];

@@ -3,7 +3,7 @@ import { proseTime } from "@withy/core/date-words";
 import { type AppError, refused } from "@withy/core/errors";
 import { refusal } from "@withy/core/refusal";
 import { addDays, dayOf, timeOf } from "@withy/core/zoned-time";
-import { intersect, overlaps } from "@withy/diary/interval";
+import { type Interval, intersect, overlaps } from "@withy/diary/interval";
 import { type RoomNeeds, roomSuits } from "@withy/diary/room-suits";
 import { sql } from "drizzle-orm";
 import type { Context } from "../context";
@@ -11,7 +11,7 @@ import { type Claim, findHolder } from "./claim-slots";
 import { rowsOf, utc } from "./raw-rows";
 import { freeTime, readClaimed, readTherapistDays } from "./therapist-day";
 
-interface Wanted extends Claim {
+export interface Wanted extends Claim {
   readonly site: { readonly id: string; readonly zone: string };
   readonly needs: RoomNeeds;
   readonly durationMinutes: number;
@@ -56,8 +56,15 @@ async function describeHolder(
   return { row, takenBy };
 }
 
-/** The next three starts of the same therapist at the site for which a room of the kind is free too. */
-async function nextFree(ctx: Context, w: Wanted): Promise<SlotTakenDetail["nextFree"]> {
+/**
+ * The next three starts of the same therapist at the site for which a room of the kind is free too.
+ * @param spokenFor stretches of the therapist's time that are free but meant for something else
+ */
+export async function nextFree(
+  ctx: Context,
+  w: Wanted,
+  spokenFor: readonly Interval[] = [],
+): Promise<SlotTakenDetail["nextFree"]> {
   const now = ctx.clock.now();
   const from = new Date(Math.max(w.startsAt.getTime(), now.getTime()));
   const days = await readTherapistDays(
@@ -79,7 +86,8 @@ async function nextFree(ctx: Context, w: Wanted): Promise<SlotTakenDetail["nextF
     w.appointmentId,
   );
   const window = [{ from: from.getTime(), to: until.getTime() }];
-  const free = intersect(freeTime(days, claimed.get(w.therapistId) ?? [], w.cleanDownMinutes), window);
+  const taken = [...(claimed.get(w.therapistId) ?? []), ...spokenFor];
+  const free = intersect(freeTime(days, taken, w.cleanDownMinutes), window);
   const need = (w.durationMinutes + w.cleanDownMinutes) * 60_000;
   const found: { startsAt: string; day: string; startTime: string; roomId: string }[] = [];
   for (const gap of free)

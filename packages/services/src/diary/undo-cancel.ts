@@ -7,6 +7,7 @@ import { loadRecord } from "../load-record";
 import { once } from "../once";
 import { verb } from "../verb";
 import { readAppointment } from "./appointment-view";
+import { notCancelled } from "./cancellation";
 import { saveAppointment, takeAppointment } from "./change-appointment";
 import { claimSlots } from "./claim-slots";
 import { recordChange } from "./record-change";
@@ -36,13 +37,7 @@ export const undoCancel = verb("diary.cancel", undoInput, async (ctx, input): Pr
       const needs = { kind: roomKind, equipment: needsEquipment, isStepFree: false };
       throw await slotTaken(tx, { ...claim, site, needs, durationMinutes, cleanDownMinutes });
     }
-    const after = await saveAppointment(tx, before, {
-      state: undo.to,
-      cancelledAt: null,
-      cancelledBy: null,
-      cancelReason: null,
-      isLateCancellation: false,
-    });
+    const after = await saveAppointment(tx, before, { state: undo.to, ...notCancelled });
     await closeChange(tx, before, undo);
     await recordChange(tx, "undone", before, after);
     await sendVisitMessage(tx, "booking-confirmed", id);

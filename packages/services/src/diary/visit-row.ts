@@ -34,6 +34,7 @@ export interface VisitRow {
   readonly email: string | null;
   readonly communication_needs: string | null;
   readonly episode_id: string | null;
+  readonly course_id: string | null;
   readonly starts_at: string;
   readonly ends_at: string;
   readonly clean_down_minutes: number;
@@ -65,6 +66,7 @@ type OwnColumn =
   | "service_id"
   | "patient_id"
   | "episode_id"
+  | "course_id"
   | "starts_at"
   | "ends_at"
   | "clean_down_minutes"
@@ -91,6 +93,7 @@ export function newVisitRow(row: typeof appointments.$inferSelect, names: VisitN
     service_id: row.serviceId,
     patient_id: row.patientId,
     episode_id: row.episodeId,
+    course_id: row.courseId,
     starts_at: sqlTime(row.startsAt),
     ends_at: sqlTime(row.endsAt),
     clean_down_minutes: row.cleanDownMinutes,
@@ -115,7 +118,7 @@ export async function readVisitRow(
       a.room_id, r.name as room_name,
       a.service_id, v.name as service_name, v.kind as service_kind, v.room_kind,
       a.patient_id, concat(p.given_name, ' ', p.family_name) as patient_name, p.given_name, p.preferred_name,
-      p.born_on, p.phone, p.email, p.communication_needs, a.episode_id,
+      p.born_on, p.phone, p.email, p.communication_needs, a.episode_id, a.course_id,
       a.starts_at, a.ends_at, a.clean_down_minutes, a.desk_note, a.override_reason,
       a.arrived_at, a.session_started_at, a.session_ended_at,
       a.cancelled_at, a.cancelled_by, a.cancel_reason, a.is_late_cancellation,

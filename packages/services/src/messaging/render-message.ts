@@ -4,6 +4,7 @@ import type { OutboxRow } from "./claim-messages";
 import type { PostOffice, Renderer } from "./message-renderer";
 import { renderPasswordReset, renderStaffInvitation } from "./render-account-message";
 import { renderAppointmentMessage } from "./render-appointment-message";
+import { renderCourseMessage } from "./render-course-message";
 import { renderLetterMessage } from "./render-letter-message";
 import { renderVisitReminder } from "./render-visit-reminder";
 
@@ -12,6 +13,9 @@ const renderers: Record<string, Renderer> = {
   "booking-moved": renderAppointmentMessage,
   "booking-cancelled": renderAppointmentMessage,
   "visit-reminder": renderVisitReminder,
+  "course-booked": renderCourseMessage,
+  "course-moved": renderCourseMessage,
+  "course-cancelled": renderCourseMessage,
   "password-reset": renderPasswordReset,
   "staff-invitation": renderStaffInvitation,
   "letter-waiting": renderLetterMessage,

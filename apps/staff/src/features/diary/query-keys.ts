@@ -8,6 +8,8 @@ export const diaryKeys = {
   week: (therapistId: string, day: string | undefined) => ["diary", "week", therapistId, day] as const,
   appointment: (id: string) => ["diary", "appointment", id] as const,
   times: (wishes: object) => ["diary", "times", wishes] as const,
+  course: (id: string) => ["diary", "course", id] as const,
+  proposal: (query: object) => ["diary", "course-proposal", query] as const,
   choices: ["diary-choices"] as const,
   changes: (siteIds: readonly string[]) => ["diary", "changes", siteIds] as const,
 };

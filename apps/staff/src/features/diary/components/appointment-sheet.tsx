@@ -131,6 +131,11 @@ function When({ view }: { view: AppointmentView }) {
       <Row gutter="with">
         {view.therapist.name}, in {view.room.name}, {view.site.name}
       </Row>
+      {view.courseId && (
+        <Row gutter="course">
+          <Link href={`/diary/course/${view.courseId}`}>One visit of a course</Link>
+        </Row>
+      )}
       {view.patient.phone && (
         <Row gutter="tel">
           <a className="num" href={`tel:${view.patient.phone}`}>

@@ -1,11 +1,13 @@
 "use client";
 import type { AppointmentView, BookingChoicesView, FoundTimeView } from "@withy/contracts/diary";
 import { AlertLine } from "@withy/ui/alert-line";
+import { ButtonLink } from "@withy/ui/button";
 import type { ComboboxOption } from "@withy/ui/combobox";
 import { EmptyState } from "@withy/ui/empty-state";
 import { Page, PageTitle } from "@withy/ui/page";
 import { Skeleton } from "@withy/ui/skeleton";
 import dynamic from "next/dynamic";
+import Link from "next/link";
 import { useRouter } from "next/navigation";
 import { useDeferredValue, useMemo, useState } from "react";
 import { problemItems } from "@/api/form-problems";
@@ -24,6 +26,20 @@ export interface FindScreenProps {
   start: Wishes;
   startPatient: ComboboxOption | null;
   today: string;
+}
+
+/** The chosen time as the first of a course, for the same patient and service. */
+function courseHref(wishes: Wishes, patient: ComboboxOption | null, time: FoundTimeView | undefined): string {
+  const query = new URLSearchParams();
+  if (patient) query.set("patient", patient.id);
+  if (wishes.serviceId) query.set("service", wishes.serviceId);
+  if (time) {
+    query.set("therapist", time.therapist.id);
+    query.set("site", time.site.id);
+    query.set("on", time.day);
+    query.set("at", time.startTime);
+  }
+  return `/diary/course?${query}`;
 }
 
 /** Why this time and not that one: wishes on the left, times in the middle, the day it lands in on the right. */
@@ -48,7 +64,14 @@ export function FindScreen({ choices, start, startPatient, today }: FindScreenPr
   return (
     <Page fit className="findpage">
       <div className="findwishes">
-        <PageTitle title="Find a time" />
+        <PageTitle
+          title="Find a time"
+          actions={
+            <ButtonLink size="small" as={Link} href={courseHref(wishes, patient, chosenTime)}>
+              As a course
+            </ButtonLink>
+          }
+        />
         <WishesForm
           choices={choices}
           wishes={wishes}

@@ -3,13 +3,22 @@ import { longDate, plainDateWords, proseTime } from "@withy/core/date-words";
 import { formatMoney } from "@withy/core/money";
 import { SectionHead } from "@withy/ui/section-head";
 import Link from "next/link";
+import type { ReactNode } from "react";
 import { AppointmentStateMark } from "@/components/appointment-state-mark";
 
+export interface PatientFactsProps {
+  patient: PatientView;
+  today: string;
+  /** What other areas put beside the record, between what matters now and how to reach the person. */
+  children?: ReactNode;
+}
+
 /** What matters now, how to reach the person, who pays: beside the timeline. */
-export function PatientFacts({ patient, today }: { patient: PatientView; today: string }) {
+export function PatientFacts({ patient, today, children }: PatientFactsProps) {
   return (
     <aside className="pfacts" aria-label="At a glance">
       {patient.care && <Now care={patient.care} clinical={patient.clinical} today={today} />}
+      {children}
       <SectionHead title="Reach them" />
       <dl className="facts">
         <dt>Phone</dt>

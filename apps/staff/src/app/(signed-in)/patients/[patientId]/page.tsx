@@ -3,7 +3,9 @@ import { can } from "@withy/core/access/can";
 import type { Permission } from "@withy/core/access/permissions";
 import { plainDateWords, shortDate } from "@withy/core/date-words";
 import { dayOf } from "@withy/core/zoned-time";
+import { listCourses } from "@withy/services/diary";
 import { getTimeline } from "@withy/services/patients";
+import { PatientCourses } from "@/features/diary/components/patient-courses";
 import { PatientFacts } from "@/features/patients/components/patient-facts";
 import { Timeline } from "@/features/patients/components/timeline";
 import { orNotFound, requireContext } from "@/server/context";
@@ -23,7 +25,10 @@ export default async function PatientPage({ params }: PageProps<"/patients/[pati
   const { patientId } = await params;
   const ctx = await requireContext("patients.read");
   const patient = await openPatient(patientId);
-  const first = await orNotFound(getTimeline(ctx, { patientId }));
+  const [first, courses] = await Promise.all([
+    orNotFound(getTimeline(ctx, { patientId })),
+    can(ctx.roles, "diary.read") ? listCourses(ctx, { patientId }) : null,
+  ]);
   const today = dayOf(ctx.clock.now(), ctx.zone);
   const { title, aside } = headWords(patient, today);
   return (
@@ -36,7 +41,11 @@ export default async function PatientPage({ params }: PageProps<"/patients/[pati
         first={first}
         kinds={kinds.filter(({ permission }) => can(ctx.roles, permission))}
       />
-      <PatientFacts patient={patient} today={today} />
+      <PatientFacts patient={patient} today={today}>
+        {courses && (
+          <PatientCourses patientId={patientId} courses={courses} mayBook={can(ctx.roles, "diary.book")} />
+        )}
+      </PatientFacts>
     </div>
   );
 }

@@ -1,0 +1,4 @@
+import { bookCourse } from "@withy/services/diary";
+import { route } from "@/server/run-route";
+
+export const POST = route(bookCourse, { status: 201 });
