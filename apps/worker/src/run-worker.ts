@@ -1,5 +1,5 @@
 import type { SystemContext } from "@withy/services/context";
-import { sendDueReminders } from "@withy/services/diary";
+import { sendDueReminders, settleOffers } from "@withy/services/diary";
 import {
   beatHeart,
   type DrainOptions,
@@ -21,6 +21,7 @@ export interface WorkerOptions extends DrainOptions {
   readonly beatMs?: number;
   readonly pruneMs?: number;
   readonly remindMs?: number;
+  readonly offersMs?: number;
 }
 
 export interface Worker {
@@ -61,7 +62,7 @@ async function repeat(
   }
 }
 
-/** Starts the heartbeat, the mail, the jobs and the housekeeping side by side: none waits for another. */
+/** Starts the heartbeat, the mail, the jobs, the ends of offers and the housekeeping side by side: none waits for another. */
 export function runWorker(options: WorkerOptions): Worker {
   const {
     workerId,
@@ -70,6 +71,7 @@ export function runWorker(options: WorkerOptions): Worker {
     beatMs = 5_000,
     pruneMs = 3_600_000,
     remindMs = 60_000,
+    offersMs = 5_000,
   } = options;
   const control = new AbortController();
   const startedAt = newContext().clock.now();
@@ -90,6 +92,9 @@ export function runWorker(options: WorkerOptions): Worker {
       await sendDueReminders(newContext());
       return remindMs;
     }),
+    repeat(control.signal, options, "offers", async () =>
+      (await settleOffers(newContext())) > 0 ? 0 : offersMs,
+    ),
     repeat(control.signal, options, "housekeeping", async () =>
       (await pruneOldClaims(newContext())) > 0 ? 100 : pruneMs,
     ),

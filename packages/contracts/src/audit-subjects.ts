@@ -3,6 +3,8 @@ export const auditSubjects = [
   "patient",
   "appointment",
   "course",
+  "waiting-entry",
+  "offer-round",
   "episode",
   "note",
   "measure-record",

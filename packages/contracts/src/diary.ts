@@ -5,5 +5,7 @@ export * from "./diary/day";
 export * from "./diary/finding";
 export * from "./diary/live";
 export * from "./diary/message";
+export * from "./diary/offer-link";
 export * from "./diary/settings";
 export * from "./diary/today";
+export * from "./diary/waiting";

@@ -15,11 +15,17 @@ export const accountTemplates = ["password-reset", "staff-invitation"] as const;
 export type AccountTemplate = (typeof accountTemplates)[number];
 
 export type MessageTemplate = AppointmentTemplate | CourseTemplate | AccountTemplate | "letter-waiting";
+/** Messages to whoever waits for another time. */
+export const offerTemplates = ["offer-made", "offer-gone"] as const;
+export type OfferTemplate = (typeof offerTemplates)[number];
+
+export type MessageTemplate = AppointmentTemplate | AccountTemplate | OfferTemplate | "letter-waiting";
 
 export const messageTemplates: readonly MessageTemplate[] = [
   ...appointmentTemplates,
   ...courseTemplates,
   ...accountTemplates,
+  ...offerTemplates,
   "letter-waiting",
 ];
 
@@ -33,6 +39,8 @@ export const messageTemplateWords: Record<MessageTemplate, string> = {
   "course-cancelled": "Rest of a course cancelled",
   "password-reset": "New password",
   "staff-invitation": "Invitation",
+  "offer-made": "Earlier time offered",
+  "offer-gone": "Offered time has gone",
   "letter-waiting": "Letter",
 };
 

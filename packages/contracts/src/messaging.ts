@@ -26,6 +26,23 @@ export const letterMessagePayload = z.strictObject({
 });
 export type LetterMessagePayload = z.infer<typeof letterMessagePayload>;
 
+/** What an offer of a time, or the note that it has gone, says. Never what the visit is for. */
+export const offerMessagePayload = z.strictObject({
+  offerId: z.uuid(),
+  startsAt: z.iso.datetime(),
+  endsAt: z.iso.datetime(),
+  expiresAt: z.iso.datetime(),
+  zone: z.string(),
+  /** Site and address in one line. */
+  place: z.string(),
+  phone: z.string(),
+  withWhom: z.string(),
+  greetingName: z.string(),
+  /** The private page; null with "offer-gone". */
+  path: secretPath.nullable(),
+});
+export type OfferMessagePayload = z.infer<typeof offerMessagePayload>;
+
 export const listMessagesInput = z.strictObject({
   state: z.enum(["all", "waiting", "sent", "failed"]).default("all"),
   patientId: idField.optional(),

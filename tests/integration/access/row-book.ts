@@ -20,6 +20,7 @@ import {
 import { addAppointment } from "../../support/diary-rows";
 import { addEpisode, addPatient } from "../../support/people";
 import type { TestPractice } from "../../support/practice";
+import { writeWaiting } from "./waiting-rows";
 
 /** One row of every kind that an input can name, by the name that inputs give it. */
 export type RowBook = Readonly<Record<string, string>>;
@@ -136,8 +137,12 @@ export async function writeRowBook(practice: TestPractice): Promise<RowBook> {
     keyHash: Buffer.from(newId().replaceAll("-", "").repeat(2), "hex"),
   };
   await db.insert(apiKeys).values({ ...apiKey, createdAt: now, createdBy: staff.owner.id });
+  const waits = await writeWaiting(practice, patient.id);
   return {
+    ...waits,
     apiKeyId: apiKey.id,
+    insteadOfId: visit.id,
+    freedById: visit.id,
     patientId: patient.id,
     episodeId: episode.id,
     appointmentId: visit.id,

@@ -4,9 +4,12 @@ import {
   diaryClaims,
   invoices,
   notes,
+  offerRounds,
   payments,
   practices,
   staffAccounts,
+  waitingEntries,
+  waitingOffers,
 } from "@withy/db/schema";
 import { isSeeded, seedDemo } from "@withy/db/seed";
 import { holdingStates } from "@withy/diary/appointment-states";
@@ -116,4 +119,24 @@ test("the harbour programme has ten items and takes twenty minutes", async () =>
   if (!row) throw new Error("The programme is missing.");
   expect(row.content.items).toHaveLength(10);
   expect(sessionTime(row.content).elapsedSeconds).toBe(20 * 60);
+});
+
+test("a dozen people wait with wishes, and one time that nobody has taken is on offer to some of them", async () => {
+  const entries = await db.select().from(waitingEntries).where(inArray(waitingEntries.practiceId, ids));
+  expect(entries.filter((entry) => Object.keys(entry.wishes).length > 0).length).toBeGreaterThan(6);
+  expect(new Set(entries.map((entry) => entry.urgency)).size).toBe(3);
+  const rounds = await db.select().from(offerRounds).where(inArray(offerRounds.practiceId, ids));
+  const open = rounds.filter((round) => round.state === "open" && round.expiresAt > now);
+  expect(open.length).toBeGreaterThan(0);
+  for (const round of open) {
+    const taken = await db
+      .select()
+      .from(diaryClaims)
+      .where(
+        sql`${diaryClaims.resourceId} = ${round.therapistId} and ${diaryClaims.slotAt} = ${round.startsAt}`,
+      );
+    expect(taken).toEqual([]);
+    const offers = await db.select().from(waitingOffers).where(eq(waitingOffers.roundId, round.id));
+    expect(offers.some((offer) => offer.state === "open")).toBe(true);
+  }
 });

@@ -10,6 +10,7 @@ import { type Books, planBooks, writeBooks } from "./add-money";
 import { addNotes } from "./add-notes";
 import { addProgrammes } from "./add-programmes";
 import { addTrail } from "./add-trail";
+import { addWaiting } from "./add-waiting";
 import { planEleri, tellEleri, wordsOfEleri } from "./eleri";
 import { type Leave, planDiary } from "./plan-diary";
 import { makeIds, makeRandom } from "./random";
@@ -73,6 +74,7 @@ function tell(stage: Stage, plan: PracticePlan): Books {
   addLetters(stage, house, courses, endedOn);
   const books = planBooks(stage, house, courses);
   addTrail(stage, house, visits, books);
+  addWaiting(stage, house, courses);
   return books;
 }
 

@@ -41,7 +41,7 @@ export interface VisitPlan {
  * The instant behind what was typed: an instant as it is, or a clock time at the site.
  * @throws refused `clock-gap` for a time that the clocks jump over
  */
-function startOf(text: string, zone: string): Date {
+export function startOf(text: string, zone: string): Date {
   if (/(?:Z|[+-]\d{2}:\d{2})$/i.test(text.slice(16))) return new Date(text);
   const start = readStart(text.slice(0, 10), text.slice(11, 16), zone);
   if (start instanceof Date) return start;

@@ -29,18 +29,26 @@ const actions: Record<ChangeKind, string> = {
 /**
  * Writes down what was done to a visit, for the desk and for the audit, in the caller's transaction. A move between
  * sites is told at both.
+ * @param byLink where a patient did it behind a private link: the audit then names the offer and nobody of the staff
  */
 export async function recordChange(
   ctx: Context,
   kind: ChangeKind,
   before: Row | null,
   after: Row,
+  byLink: { readonly offerId: string } | null = null,
 ): Promise<void> {
-  await writeTogether(ctx.db, changeWrites(ctx, kind, before, after));
+  await writeTogether(ctx.db, changeWrites(ctx, kind, before, after, byLink));
 }
 
 /** The statements that `recordChange` runs, to run with others. */
-export function changeWrites(ctx: Context, kind: ChangeKind, before: Row | null, after: Row): SQLWrapper[] {
+export function changeWrites(
+  ctx: Context,
+  kind: ChangeKind,
+  before: Row | null,
+  after: Row,
+  byLink: { readonly offerId: string } | null = null,
+): SQLWrapper[] {
   const changedAt = ctx.clock.now();
   const change = {
     practiceId: ctx.practiceId,
@@ -61,6 +69,7 @@ export function changeWrites(ctx: Context, kind: ChangeKind, before: Row | null,
     patientId: after.patientId,
     siteId: after.siteId,
     detail: {
+      ...byLink,
       state: after.state,
       startsAt: after.startsAt.toISOString(),
       ...(before && before.state !== after.state ? { stateBefore: before.state } : {}),
@@ -68,5 +77,8 @@ export function changeWrites(ctx: Context, kind: ChangeKind, before: Row | null,
       ...(after.overrideReason !== null && kind !== "marked" ? { outsideHours: true } : {}),
     },
   };
-  return [ctx.db.insert(appointmentChanges).values(changes), auditWrite(ctx, [entry])];
+  return [
+    ctx.db.insert(appointmentChanges).values(changes),
+    auditWrite(byLink ? { ...ctx, staffMemberId: null } : ctx, [entry]),
+  ];
 }

@@ -7,6 +7,7 @@ import { renderAppointmentMessage } from "./render-appointment-message";
 import { renderCourseMessage } from "./render-course-message";
 import { renderLetterMessage } from "./render-letter-message";
 import { renderVisitReminder } from "./render-visit-reminder";
+import { renderOfferMessage } from "./render-offer-message";
 
 const renderers: Record<string, Renderer> = {
   "booking-confirmed": renderAppointmentMessage,
@@ -19,6 +20,8 @@ const renderers: Record<string, Renderer> = {
   "password-reset": renderPasswordReset,
   "staff-invitation": renderStaffInvitation,
   "letter-waiting": renderLetterMessage,
+  "offer-made": renderOfferMessage,
+  "offer-gone": renderOfferMessage,
 };
 
 /** The message of an outbox row, or null where it must no longer go. */

@@ -11,7 +11,7 @@ export type Settlement =
   | { readonly outcome: "try-later"; readonly reason: string };
 
 /** These messages carry a secret link, which is worth nothing to us once it has gone out. */
-const carriesSecret = new Set(["password-reset", "staff-invitation", "letter-waiting"]);
+const carriesSecret = new Set(["password-reset", "staff-invitation", "letter-waiting", "offer-made"]);
 
 function changesFor(row: OutboxRow, settlement: Settlement, now: Date): Partial<OutboxRow> {
   const free = { claimedAt: null, claimedBy: null };

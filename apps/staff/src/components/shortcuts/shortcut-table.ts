@@ -37,6 +37,14 @@ export const shortcuts = [
     permission: "diary.book",
   },
   {
+    id: "go-waiting",
+    keys: "g w",
+    label: "Waiting list",
+    group: "Go to",
+    href: "/diary/waiting",
+    permission: "diary.read",
+  },
+  {
     id: "go-patients",
     keys: "g p",
     label: "Patients",
@@ -117,6 +125,7 @@ export const shortcuts = [
     permission: "audit.read",
   },
   { id: "book", keys: "b", label: "Book an appointment", group: "Diary" },
+  { id: "add-waiting", keys: "w", label: "Add someone to the waiting list", group: "Diary" },
   { id: "move", keys: "m", label: "Move the appointment", group: "Diary" },
   { id: "diary-today", keys: "t", label: "Go to today", group: "Diary" },
   { id: "previous", keys: "[", label: "The day or week before", group: "Diary" },

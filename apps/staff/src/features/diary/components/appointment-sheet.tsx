@@ -14,6 +14,7 @@ import { problemItems } from "@/api/form-problems";
 import { useAppointment } from "../hooks/use-appointment";
 import { useEscape } from "../hooks/use-escape";
 import { phoneWords } from "../phone-words";
+import { offerHref } from "../waiting-address";
 import { SheetStates, type SheetVerbs } from "./sheet-states";
 
 export interface AppointmentSheetProps {
@@ -46,7 +47,7 @@ export function AppointmentSheet({ appointmentId, today, verbs, onMove, onClose 
       {query.data && (
         <>
           <Who view={query.data} today={today} heading={heading} />
-          <When view={query.data} />
+          <When view={query.data} canOffer={verbs.canBook} />
           <SheetStates view={query.data} verbs={verbs} />
           <Owed view={query.data} />
           <Around view={query.data} today={today} />
@@ -122,7 +123,16 @@ function Who({
   );
 }
 
-function When({ view }: { view: AppointmentView }) {
+/** The time of a cancelled visit that is still to come may go to someone who waits. */
+const isFreed = (view: AppointmentView): boolean =>
+  view.state === "cancelled" && Date.parse(view.startsAt) > Date.now();
+
+function offerOf(view: AppointmentView): string {
+  const { site, therapist, startsAt, id } = view;
+  return offerHref({ siteId: site.id, therapistId: therapist.id, startsAt, freedById: id });
+}
+
+function When({ view, canOffer }: { view: AppointmentView; canOffer: boolean }) {
   return (
     <div className="part">
       <Row gutter="until">
@@ -147,6 +157,11 @@ function When({ view }: { view: AppointmentView }) {
         <Row gutter="why">
           Cancelled by the {view.cancellation.by}
           {view.cancellation.isLate ? ", late" : ""}: {view.cancellation.reason}
+        </Row>
+      )}
+      {canOffer && isFreed(view) && (
+        <Row>
+          <Link href={offerOf(view)}>Offer this time to the waiting list</Link>
         </Row>
       )}
       {view.overrideReason && <Row gutter="note">Outside the usual hours: {view.overrideReason}</Row>}

@@ -14,6 +14,7 @@ import { problemItems } from "@/api/form-problems";
 import { useShortcut } from "@/components/shortcuts/shortcut-provider";
 import { relaxed, timesQuery, type Wishes } from "../find-wishes";
 import { useFoundTimes } from "../hooks/use-found-times";
+import { addHref } from "../waiting-address";
 import { wantedTime } from "../wanted-time";
 import { FoundDay } from "./found-day";
 import { FoundTimes } from "./found-times";
@@ -102,6 +103,7 @@ export function FindScreen({ choices, start, startPatient, today }: FindScreenPr
             onChoose={setChosen}
             onBook={setBooking}
             onRelax={(wish) => change(relaxed(wish))}
+            waitHref={addHref({ patientId: patient?.id ?? null, serviceId: wishes.serviceId })}
           />
         )}
       </div>

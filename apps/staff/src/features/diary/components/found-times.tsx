@@ -2,9 +2,10 @@
 import type { FoundTimesView, FoundTimeView } from "@withy/contracts/diary";
 import { titleDate } from "@withy/core/date-words";
 import type { WishKind } from "@withy/diary/time-wishes";
-import { Button } from "@withy/ui/button";
+import { Button, ButtonLink, Buttons } from "@withy/ui/button";
 import { EmptyState } from "@withy/ui/empty-state";
 import { SectionHead } from "@withy/ui/section-head";
+import Link from "next/link";
 
 export interface FoundTimesProps {
   found: FoundTimesView;
@@ -13,10 +14,20 @@ export interface FoundTimesProps {
   onChoose: (index: number) => void;
   onBook: (time: FoundTimeView) => void;
   onRelax: (wish: WishKind) => void;
+  /** Where the caller is put on the waiting list with what is known. */
+  waitHref: string;
 }
 
 /** The times, best first, each with what speaks for and against it. */
-export function FoundTimes({ found, isLooking, chosen, onChoose, onBook, onRelax }: FoundTimesProps) {
+export function FoundTimes({
+  found,
+  isLooking,
+  chosen,
+  onChoose,
+  onBook,
+  onRelax,
+  waitHref,
+}: FoundTimesProps) {
   const { times, none } = found;
   return (
     <section className="ranked" aria-labelledby="found" aria-busy={isLooking}>
@@ -47,7 +58,7 @@ export function FoundTimes({ found, isLooking, chosen, onChoose, onBook, onRelax
           />
         ))}
       </ol>
-      {none && <WhyNone none={none} isEmpty={times.length === 0} onRelax={onRelax} />}
+      {none && <WhyNone none={none} isEmpty={times.length === 0} onRelax={onRelax} waitHref={waitHref} />}
     </section>
   );
 }
@@ -114,14 +125,22 @@ interface WhyNoneProps {
   none: NonNullable<FoundTimesView["none"]>;
   isEmpty: boolean;
   onRelax: (wish: WishKind) => void;
+  waitHref: string;
 }
 
-function WhyNone({ none, isEmpty, onRelax }: WhyNoneProps) {
+function WhyNone({ none, isEmpty, onRelax, waitHref }: WhyNoneProps) {
   const { relax } = none;
-  const action = relax && (
-    <Button size="small" onClick={() => onRelax(relax.wish)}>
-      Look without that wish
-    </Button>
+  const action = (
+    <Buttons>
+      {relax && (
+        <Button size="small" onClick={() => onRelax(relax.wish)}>
+          Look without that wish
+        </Button>
+      )}
+      <ButtonLink size="small" as={Link} href={waitHref}>
+        Put on the waiting list
+      </ButtonLink>
+    </Buttons>
   );
   if (isEmpty) {
     return (

@@ -47,6 +47,11 @@ export function PatientHead({ patient, mayEdit, mayBook }: Props) {
               </ButtonLink>
             )}
             {mayBook && (
+              <ButtonLink size="small" href={`/diary/waiting?add=1&patient=${patient.id}`} as={Link}>
+                Waiting list
+              </ButtonLink>
+            )}
+            {mayBook && (
               <ButtonLink kind="primary" size="small" href={bookAt} as={Link} shortcut="B">
                 Book
               </ButtonLink>

@@ -30,6 +30,11 @@ function bookHref(gap: TodayGap, day: string): string {
   return `/diary/find?${new URLSearchParams(wishes)}`;
 }
 
+/** To whoever waits and would come then. */
+function offerHref({ siteId, therapistId, startsAt }: TodayGap): string {
+  return `/diary/waiting/offer?${new URLSearchParams({ site: siteId, therapist: therapistId, at: startsAt })}`;
+}
+
 /** Beside the arrivals: time that can still be sold, and money that can still be taken. */
 export function TodaySide({ view, canBook }: { view: TodayView; canBook: boolean }) {
   return (
@@ -39,6 +44,11 @@ export function TodaySide({ view, canBook }: { view: TodayView; canBook: boolean
           title="Gaps to fill"
           id="gaps"
           aside={view.gapMinutes > 0 ? `${lengthWords(view.gapMinutes)} today` : undefined}
+          action={
+            <Link className="small" href="/diary/waiting">
+              Waiting list
+            </Link>
+          }
         />
         {view.gaps.length === 0 && <p className="soft small todaylast">No gap long enough for a visit.</p>}
         <ul>
@@ -54,6 +64,9 @@ export function TodaySide({ view, canBook }: { view: TodayView; canBook: boolean
               </div>
               {canBook && (
                 <span className="small ac">
+                  <Link href={offerHref(gap)} aria-label={`Offer ${gap.therapistName} at ${gap.startTime}`}>
+                    Offer
+                  </Link>{" "}
                   <Link
                     href={bookHref(gap, view.day)}
                     aria-label={`Book ${gap.therapistName} at ${gap.startTime}`}

@@ -1,0 +1,4 @@
+import { listFreedTimes } from "@withy/services/diary";
+import { route } from "@/server/run-route";
+
+export const GET = route(listFreedTimes);

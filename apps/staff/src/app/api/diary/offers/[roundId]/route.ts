@@ -1,0 +1,4 @@
+import { getOfferRound } from "@withy/services/diary";
+import { route } from "@/server/run-route";
+
+export const GET = route(getOfferRound);
