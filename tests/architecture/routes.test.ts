@@ -60,9 +60,12 @@ test("a read needs no permission to write", () => {
   expect(odd.map(({ verb }) => verb).sort()).toEqual([
     "findTimes",
     "getBookingChoices",
+    "getCoverPlan",
     "getDraftingJob",
     "getFindingWeights",
     "getPracticeSettings",
+    "listCoverPlaces",
+    "listCoverPlans",
     "listProducts",
     "listStaff",
     "listToIssue",

@@ -1,6 +1,7 @@
 export * from "./diary/appointment";
 export * from "./diary/calendar-feed";
 export * from "./diary/course";
+export * from "./diary/cover";
 export * from "./diary/day";
 export * from "./diary/finding";
 export * from "./diary/live";

@@ -21,6 +21,7 @@ import { addAppointment } from "../../support/diary-rows";
 import { addEpisode, addPatient } from "../../support/people";
 import type { TestPractice } from "../../support/practice";
 import { writeWaiting } from "./waiting-rows";
+import { writeCover } from "./cover-rows";
 
 /** One row of every kind that an input can name, by the name that inputs give it. */
 export type RowBook = Readonly<Record<string, string>>;
@@ -138,8 +139,11 @@ export async function writeRowBook(practice: TestPractice): Promise<RowBook> {
   };
   await db.insert(apiKeys).values({ ...apiKey, createdAt: now, createdBy: staff.owner.id });
   const waits = await writeWaiting(practice, patient.id);
+    const cover = await writeCover(practice, visit);
+  
   return {
     ...waits,
+    ...cover,
     apiKeyId: apiKey.id,
     insteadOfId: visit.id,
     freedById: visit.id,

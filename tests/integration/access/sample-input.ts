@@ -20,6 +20,7 @@ interface Schema {
 /** What a shape alone cannot say: values that the input's own rules accept. Undefined leaves the property out. */
 const known: Readonly<Record<string, unknown>> = {
   startsAt: "2026-12-08T10:15",
+  endsAt: "2026-12-08T16:00",
   day: "2026-12-08",
   firstDay: "2026-12-08",
   startTime: "10:15",

@@ -56,10 +56,19 @@ export function bookingConfirmed(message: AppointmentMessage): RenderedEmail {
 
 /** @param before when it was, for a reader who remembers the old time */
 export function bookingMoved(message: AppointmentMessage, before: Date): RenderedEmail {
+  const when = whenWords(message.appointment.startsAt, message.zone);
+  // Another therapist or site at the same time: then the time is the one thing that has not changed.
+  const isSameTime = before.getTime() === message.appointment.startsAt.getTime();
   const content: EmailContent = {
-    subject: `New time for your appointment: ${whenWords(message.appointment.startsAt, message.zone)}`,
+    subject: isSameTime
+      ? `A change to your appointment on ${when}`
+      : `New time for your appointment: ${when}`,
     greeting: `Dear ${message.greetingName}`,
-    paragraphs: [`Your appointment has a new time. Before, it was ${whenWords(before, message.zone)}.`],
+    paragraphs: [
+      isSameTime
+        ? "Your appointment keeps its time. Where it is or whom you see has changed; it now stands as follows."
+        : `Your appointment has a new time. Before, it was ${whenWords(before, message.zone)}.`,
+    ],
     facts: facts(message),
     after: [noticeLine(message), "The attached file changes the appointment in your calendar."],
     from: message.sender,

@@ -45,6 +45,14 @@ export const shortcuts = [
     permission: "diary.read",
   },
   {
+    id: "go-cover",
+    keys: "g c",
+    label: "Arrange cover",
+    group: "Go to",
+    href: "/diary/cover",
+    permission: "diary.book",
+  },
+  {
     id: "go-patients",
     keys: "g p",
     label: "Patients",

@@ -11,5 +11,8 @@ export const diaryKeys = {
   course: (id: string) => ["diary", "course", id] as const,
   proposal: (query: object) => ["diary", "course-proposal", query] as const,
   choices: ["diary-choices"] as const,
+  cover: (planId: string) => ["diary-cover", planId] as const,
+  coverPlaces: (planId: string, version: number, moveId: string) =>
+    ["diary-cover", planId, version, moveId] as const,
   changes: (siteIds: readonly string[]) => ["diary", "changes", siteIds] as const,
 };

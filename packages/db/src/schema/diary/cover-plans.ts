@@ -2,7 +2,7 @@ import { foreignKey, index, int, json, mysqlTable, primaryKey, varchar } from "d
 import { instant, tenantKey, uuid } from "../../columns";
 import { rooms } from "../practices/rooms";
 import { staffMembers } from "../practices/staff-members";
-import { appointments } from "./appointments";
+import { type AppointmentStateCode, appointments } from "./appointments";
 
 /** Where a visit could go, or goes, when its therapist or room falls out. */
 export interface CoverPlace {
@@ -13,6 +13,11 @@ export interface CoverPlace {
   /** What it costs, in the rule's points, and why in words. */
   readonly cost: number;
   readonly reasons: readonly string[];
+}
+
+/** Where a visit was, and in which state: what taking the plan back restores. */
+export interface CoverBefore extends CoverPlace {
+  readonly state: AppointmentStateCode;
 }
 
 /** A therapist away or a room shut from one instant to another, and what becomes of the visits. */
@@ -62,7 +67,7 @@ export const coverMoves = mysqlTable(
     appointmentId: uuid("appointment_id").notNull(),
     /** The visit's version when the plan was made: a visit that changed since is not moved. */
     appointmentVersion: int("appointment_version").notNull(),
-    before: json("before").$type<CoverPlace>().notNull(),
+    before: json("before").$type<CoverBefore>().notNull(),
     /** Null: no place was found, and `problem` says why. */
     place: json("place").$type<CoverPlace>(),
     problem: varchar("problem", { length: 300 }),

@@ -44,9 +44,14 @@ export function DayTitle({ day, today, sites, canBook, onDay, onSites, weekHref 
             ]}
           />
           {canBook && (
-            <ButtonLink as={Link} href="/diary/find" size="small">
-              Find a time
-            </ButtonLink>
+            <>
+              <ButtonLink as={Link} href="/diary/cover" size="small">
+                Arrange cover
+              </ButtonLink>
+              <ButtonLink as={Link} href="/diary/find" size="small">
+                Find a time
+              </ButtonLink>
+            </>
           )}
         </>
       }

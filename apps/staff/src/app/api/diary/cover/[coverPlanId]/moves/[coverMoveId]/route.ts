@@ -1,0 +1,4 @@
+import { decideCoverMove } from "@withy/services/diary";
+import { route } from "@/server/run-route";
+
+export const POST = route(decideCoverMove);
