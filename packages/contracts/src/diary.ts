@@ -3,6 +3,7 @@ export * from "./diary/calendar-feed";
 export * from "./diary/course";
 export * from "./diary/cover";
 export * from "./diary/day";
+export * from "./diary/desk";
 export * from "./diary/finding";
 export * from "./diary/live";
 export * from "./diary/message";

@@ -14,12 +14,16 @@ export type CourseTemplate = (typeof courseTemplates)[number];
 export const accountTemplates = ["password-reset", "staff-invitation"] as const;
 export type AccountTemplate = (typeof accountTemplates)[number];
 
-export type MessageTemplate = AppointmentTemplate | CourseTemplate | AccountTemplate | "letter-waiting";
 /** Messages to whoever waits for another time. */
 export const offerTemplates = ["offer-made", "offer-gone"] as const;
 export type OfferTemplate = (typeof offerTemplates)[number];
 
-export type MessageTemplate = AppointmentTemplate | AccountTemplate | OfferTemplate | "letter-waiting";
+export type MessageTemplate =
+  | AppointmentTemplate
+  | CourseTemplate
+  | AccountTemplate
+  | OfferTemplate
+  | "letter-waiting";
 
 export const messageTemplates: readonly MessageTemplate[] = [
   ...appointmentTemplates,

@@ -1,7 +1,6 @@
 import { emptyProgramme } from "@withy/clinical/programmes/new-item";
 import { newId } from "@withy/core/ids";
 import {
-  apiKeys,
   cardAttempts,
   courses,
   invoiceLines,
@@ -20,8 +19,9 @@ import {
 import { addAppointment } from "../../support/diary-rows";
 import { addEpisode, addPatient } from "../../support/people";
 import type { TestPractice } from "../../support/practice";
-import { writeWaiting } from "./waiting-rows";
 import { writeCover } from "./cover-rows";
+import { writeDesk } from "./desk-rows";
+import { writeWaiting } from "./waiting-rows";
 
 /** One row of every kind that an input can name, by the name that inputs give it. */
 export type RowBook = Readonly<Record<string, string>>;
@@ -132,21 +132,15 @@ export async function writeRowBook(practice: TestPractice): Promise<RowBook> {
   await db.insert(sessions).values(session);
   const job = { id: newId(), practiceId, kind: "billing.draft-visits", input: {}, state: "done" as const };
   await db.insert(jobs).values({ ...job, dueAt: now, createdAt: now });
-  const apiKey = {
-    ...key(),
-    name: "Trial",
-    keyHash: Buffer.from(newId().replaceAll("-", "").repeat(2), "hex"),
-  };
-  await db.insert(apiKeys).values({ ...apiKey, createdAt: now, createdBy: staff.owner.id });
   const waits = await writeWaiting(practice, patient.id);
-    const cover = await writeCover(practice, visit);
-  
+  const cover = await writeCover(practice, visit);
+  const desk = await writeDesk(practice);
   return {
     ...waits,
     ...cover,
-    apiKeyId: apiKey.id,
     insteadOfId: visit.id,
     freedById: visit.id,
+    ...desk,
     patientId: patient.id,
     episodeId: episode.id,
     appointmentId: visit.id,

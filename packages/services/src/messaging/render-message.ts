@@ -6,8 +6,8 @@ import { renderPasswordReset, renderStaffInvitation } from "./render-account-mes
 import { renderAppointmentMessage } from "./render-appointment-message";
 import { renderCourseMessage } from "./render-course-message";
 import { renderLetterMessage } from "./render-letter-message";
-import { renderVisitReminder } from "./render-visit-reminder";
 import { renderOfferMessage } from "./render-offer-message";
+import { renderVisitReminder } from "./render-visit-reminder";
 
 const renderers: Record<string, Renderer> = {
   "booking-confirmed": renderAppointmentMessage,

@@ -144,6 +144,8 @@ export const shortcuts = [
   { id: "noshow", keys: "n", label: "Did not attend", group: "Diary" },
   { id: "cancel", keys: "x", label: "Cancel the appointment", group: "Diary" },
   { id: "open", keys: "o", label: "Open the patient's record", group: "Diary" },
+  { id: "put-aside", keys: "mod+.", label: "Put aside what is half made", group: "Diary" },
+  { id: "resume", keys: "u", label: "Take up what was put aside last", group: "Diary" },
   { id: "pay", keys: "p", label: "Take a payment", group: "Invoice" },
   { id: "issue", keys: "i", label: "Issue the invoice", group: "Invoice" },
   { id: "edit", keys: "e", label: "Edit the patient's details", group: "Patient" },

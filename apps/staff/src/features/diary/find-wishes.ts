@@ -26,7 +26,7 @@ export interface Wishes {
   order: readonly RankConcern[];
 }
 
-const concerns: readonly RankConcern[] = ["wish", "wait", "knows", "day"];
+export const concerns: readonly RankConcern[] = ["wish", "wait", "knows", "day"];
 
 /** The order that the practice's weights come to. */
 export const orderOf = (weights: Weights): RankConcern[] =>

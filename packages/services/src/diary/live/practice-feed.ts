@@ -60,6 +60,7 @@ export function openPracticeFeed(
 
   async function round(): Promise<void> {
     await endTheOver();
+    if (joining.size + following.size === 0) return;
     const joiners = [...joining];
     const now = Date.now();
     // The overlap is read every time and what was told is left out: see overlapMs.

@@ -12,6 +12,7 @@ import "@/features/diary/diary.css";
 import "@/features/diary/day-grid.css";
 import "@/features/diary/day-cells.css";
 import "@/features/diary/day-sheet.css";
+import "@/features/diary/desk.css";
 import "@/features/diary/diary-narrow.css";
 
 export async function generateMetadata({ searchParams }: { searchParams: SearchParams }): Promise<Metadata> {

@@ -15,18 +15,22 @@ import { useAppointment } from "../hooks/use-appointment";
 import { useEscape } from "../hooks/use-escape";
 import { phoneWords } from "../phone-words";
 import { offerHref } from "../waiting-address";
+import { PresenceLine } from "./presence-line";
 import { SheetStates, type SheetVerbs } from "./sheet-states";
 
 export interface AppointmentSheetProps {
   appointmentId: string;
   today: string;
   verbs: SheetVerbs;
+  /** Whether one of its dialogs is open. */
+  isEditing: boolean;
   onMove: (() => void) | undefined;
   onClose: () => void;
 }
 
 /** One visit, laid on the page: who, when, what may be done now, each verb with its key. */
-export function AppointmentSheet({ appointmentId, today, verbs, onMove, onClose }: AppointmentSheetProps) {
+export function AppointmentSheet(props: AppointmentSheetProps) {
+  const { appointmentId, today, verbs, isEditing, onMove, onClose } = props;
   const query = useAppointment(appointmentId);
   const heading = useRef<HTMLHeadingElement>(null);
   const isThere = query.data !== undefined;
@@ -48,6 +52,7 @@ export function AppointmentSheet({ appointmentId, today, verbs, onMove, onClose 
         <>
           <Who view={query.data} today={today} heading={heading} />
           <When view={query.data} canOffer={verbs.canBook} />
+          <PresenceLine appointmentId={appointmentId} isEditing={isEditing} />
           <SheetStates view={query.data} verbs={verbs} />
           <Owed view={query.data} />
           <Around view={query.data} today={today} />

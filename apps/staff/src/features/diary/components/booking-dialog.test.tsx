@@ -3,8 +3,11 @@ import { cleanup, fireEvent, render, screen } from "@testing-library/react";
 import type { BookingChoicesView } from "@withy/contracts/diary";
 import { ChangesProvider } from "@withy/ui/recent-changes";
 import { afterEach, beforeEach, expect, test, vi } from "vitest";
+import { ShortcutProvider } from "@/components/shortcuts/shortcut-provider";
 import { wantedTime } from "../wanted-time";
 import { BookingDialog } from "./booking-dialog";
+
+vi.mock("next/navigation", () => ({ useRouter: () => ({ push: vi.fn() }) }));
 
 const choices: BookingChoicesView = {
   weights: { wish: 40, wait: 15, knows: 30, day: 15 },
@@ -30,6 +33,8 @@ let answer: () => Response;
 beforeEach(() => {
   sent.length = 0;
   vi.stubGlobal("fetch", async (url: string, init: RequestInit) => {
+    // That the time is held while the form is open is a courtesy on the side.
+    if (url === "/api/diary/hold") return Response.json({});
     const key = new Headers(init.headers).get("idempotency-key");
     sent.push({ url, body: JSON.parse(String(init.body)), key });
     return answer();
@@ -50,13 +55,15 @@ function open(patient: { id: string; label: string } | null) {
   render(
     <QueryClientProvider client={new QueryClient()}>
       <ChangesProvider>
-        <BookingDialog
-          start={start}
-          choices={choices}
-          today="2026-12-01"
-          onClose={() => {}}
-          onBooked={() => {}}
-        />
+        <ShortcutProvider>
+          <BookingDialog
+            start={start}
+            choices={choices}
+            today="2026-12-01"
+            onClose={() => {}}
+            onBooked={() => {}}
+          />
+        </ShortcutProvider>
       </ChangesProvider>
     </QueryClientProvider>,
   );

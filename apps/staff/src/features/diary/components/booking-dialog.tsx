@@ -1,8 +1,9 @@
 "use client";
 import type { AppointmentView, BookingChoicesView } from "@withy/contracts/diary";
 import { shortDate, weekdayDate } from "@withy/core/date-words";
+import { AlertLine } from "@withy/ui/alert-line";
 import { Button } from "@withy/ui/button";
-import { Combobox, type ComboboxOption } from "@withy/ui/combobox";
+import { Combobox } from "@withy/ui/combobox";
 import { Dialog } from "@withy/ui/dialog";
 import { ErrorSummary } from "@withy/ui/error-summary";
 import { Select } from "@withy/ui/select";
@@ -10,21 +11,20 @@ import { TextInput } from "@withy/ui/text-input";
 import Link from "next/link";
 import { useState } from "react";
 import { findPatients } from "@/api/find-patients";
+import { problemItems } from "@/api/form-problems";
+import { useShortcut } from "@/components/shortcuts/shortcut-provider";
 import { useBookAppointment } from "../hooks/use-book-appointment";
+import { useHoldTime } from "../hooks/use-hold-time";
+import { usePutAside, useRemovePutAside } from "../hooks/use-put-aside";
 import { useTimeForm } from "../hooks/use-time-form";
 import { readTime } from "../minute-words";
-import { startsAtText, type WantedTime } from "../wanted-time";
+import { asideBooking, type TypedBooking } from "../put-aside-typed";
+import { startsAtText } from "../wanted-time";
 import { NextTimes } from "./next-times";
 import { TimeFields } from "./time-fields";
 
-export interface BookingStart {
-  wanted: WantedTime;
-  patient: ComboboxOption | null;
-  serviceId: string;
-}
-
 export interface BookingDialogProps {
-  start: BookingStart;
+  start: TypedBooking;
   choices: BookingChoicesView;
   today: string;
   onClose: () => void;
@@ -36,12 +36,23 @@ const prefix = "book";
 /** Books one visit. A refusal keeps everything that was typed and says what to do. */
 export function BookingDialog({ start, choices, today, onClose, onBooked }: BookingDialogProps) {
   const book = useBookAppointment();
-  const form = useTimeForm(prefix, start.wanted, book.error);
+  const form = useTimeForm(prefix, start.wanted, book.error, start.reason);
   const { wanted } = form;
   const [patient, setPatient] = useState(start.patient);
   const [serviceId, setServiceId] = useState(start.serviceId);
-  const [deskNote, setDeskNote] = useState("");
+  const [deskNote, setDeskNote] = useState(start.deskNote ?? "");
+  const service = choices.services.find(({ id }) => id === serviceId);
+  const typed = { wanted, patient, serviceId, deskNote, reason: form.reason, asideId: start.asideId ?? null };
+  useHoldTime(wanted, service?.durationMinutes, JSON.stringify(typed));
+  const putAside = usePutAside();
+  const removeAside = useRemovePutAside();
+  const lay = () => putAside.mutate(asideBooking(typed, service?.name), { onSuccess: onClose });
+  useShortcut("put-aside", lay);
 
+  const booked = (view: AppointmentView) => {
+    if (start.asideId) removeAside.mutate(start.asideId);
+    onBooked(view);
+  };
   const submit = () => {
     const missing = [
       ...(patient ? [] : [{ id: "book-patientId", message: "Choose a patient" }]),
@@ -51,7 +62,7 @@ export function BookingDialog({ start, choices, today, onClose, onBooked }: Book
     if (!form.check(missing) || !patient || !startsAt) return;
     const { therapistId, siteId, roomId } = wanted;
     const input = { patientId: patient.id, serviceId, therapistId, siteId, roomId: roomId || null, startsAt };
-    book.mutate({ ...input, deskNote, overrideReason: form.reason || null }, { onSuccess: onBooked });
+    book.mutate({ ...input, deskNote, overrideReason: form.reason || null }, { onSuccess: booked });
   };
 
   const when =
@@ -65,9 +76,14 @@ export function BookingDialog({ start, choices, today, onClose, onBooked }: Book
       size="wide"
       title="Book an appointment"
       actions={
-        <Button kind="primary" busy={book.isPending} type="submit" form="book-form">
-          Book{when}
-        </Button>
+        <>
+          <Button kind="primary" busy={book.isPending} type="submit" form="book-form">
+            Book{when}
+          </Button>
+          <Button shortcut="Ctrl ." busy={putAside.isPending} onClick={lay}>
+            Put aside
+          </Button>
+        </>
       }
     >
       <form
@@ -78,6 +94,11 @@ export function BookingDialog({ start, choices, today, onClose, onBooked }: Book
           submit();
         }}
       >
+        {putAside.error && (
+          <AlertLine tone="danger" live>
+            {problemItems(putAside.error)[0]?.message}
+          </AlertLine>
+        )}
         <ErrorSummary
           errors={form.errors}
           attempt={`${form.attempt} ${book.failureCount} ${book.submittedAt}`}

@@ -1,10 +1,11 @@
 "use client";
-import type { AppointmentView, DiaryDayView } from "@withy/contracts/diary";
+import type { AppointmentView, DiaryDayView, PutAsideItem } from "@withy/contracts/diary";
 import dynamic from "next/dynamic";
 import type { Cursor } from "../day-cursor";
 import { useAppointment } from "../hooks/use-appointment";
 import { useChoices } from "../hooks/use-choices";
 import { clock } from "../minute-words";
+import { bookingAside } from "../put-aside-typed";
 import { wantedTime } from "../wanted-time";
 
 const BookingDialog = dynamic(() => import("./booking-dialog").then((m) => m.BookingDialog));
@@ -13,6 +14,7 @@ const CancelDialog = dynamic(() => import("./cancel-dialog").then((m) => m.Cance
 
 export type OpenDialog =
   | { readonly kind: "book"; readonly cursor: Cursor }
+  | { readonly kind: "resume"; readonly item: PutAsideItem }
   | { readonly kind: "move" | "cancel"; readonly id: string }
   | null;
 
@@ -34,13 +36,18 @@ function startAt(day: DiaryDayView, cursor: Cursor) {
 
 /** The dialog that is open, loaded only when it is first needed. */
 export function DayDialogs({ dialog, day, today, onClose, onShow }: DayDialogsProps) {
-  const needsChoices = dialog?.kind === "book" || dialog?.kind === "move";
+  const isBooking = dialog?.kind === "book" || dialog?.kind === "resume";
+  const needsChoices = isBooking || dialog?.kind === "move";
   const choices = useChoices(needsChoices).data;
-  const view = useAppointment(dialog && dialog.kind !== "book" ? dialog.id : null).data;
-  if (dialog?.kind === "book" && choices) {
+  const view = useAppointment(dialog && "id" in dialog ? dialog.id : null).data;
+  if (isBooking && choices) {
     return (
       <BookingDialog
-        start={{ wanted: startAt(day, dialog.cursor), patient: null, serviceId: "" }}
+        start={
+          dialog.kind === "resume"
+            ? bookingAside(dialog.item)
+            : { wanted: startAt(day, dialog.cursor), patient: null, serviceId: "" }
+        }
         choices={choices}
         today={today}
         onClose={onClose}

@@ -1,6 +1,6 @@
 // biome-ignore-all lint/a11y/useSemanticElements: cells that stand at their minute cannot be rows of a table
 "use client";
-import type { DayAppointment, DiaryDayView } from "@withy/contracts/diary";
+import type { DayAppointment, DiaryDayView, HeldTime } from "@withy/contracts/diary";
 import { titleDate } from "@withy/core/date-words";
 import { type KeyboardEvent, type RefObject, useEffect, useRef } from "react";
 import {
@@ -16,11 +16,14 @@ import { clock } from "../minute-words";
 import { AppointmentCell, CursorCell } from "./day-cell";
 import { DayHead } from "./day-head";
 import { DayLanes, DayRail, place, top } from "./day-rail";
+import { HeldLanes } from "./held-times";
 
 export interface DayGridProps {
   day: DiaryDayView;
   today: string;
   now: number | null;
+  /** What other people are booking at this moment. */
+  held?: readonly HeldTime[];
   cursor: Cursor;
   onCursor: (cursor: Cursor) => void;
   chosenId: string | null;
@@ -109,6 +112,7 @@ export function DayGrid(props: DayGridProps) {
         <DayRail day={day} />
         <div className="dayfield" ref={lanes}>
           <DayLanes day={day} now={now} />
+          {props.held && <HeldLanes day={day} held={props.held} />}
           {rowsOf(day, cursor, under.kind === "appointment").map(([minute, cells]) => (
             // biome-ignore lint/a11y/useFocusableInteractive: rows take no focus
             <div

@@ -1,5 +1,5 @@
 "use client";
-import type { DayAppointment, DiaryDayView } from "@withy/contracts/diary";
+import type { DayAppointment, DiaryDayView, PutAsideItem } from "@withy/contracts/diary";
 import { addDays } from "@withy/core/plain-date";
 import { AlertLine } from "@withy/ui/alert-line";
 import { Button } from "@withy/ui/button";
@@ -8,18 +8,22 @@ import { Page } from "@withy/ui/page";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
 import type { DayFilters } from "../api-client";
+import { writeDayAddress } from "../day-address";
 import { type Cursor, placeAt, stepMinutes } from "../day-cursor";
 import { useDayAddress } from "../hooks/use-day-address";
 import { useDayKeys } from "../hooks/use-day-keys";
 import { useDayVerbs } from "../hooks/use-day-verbs";
 import { useDiaryDay } from "../hooks/use-diary-day";
+import { useHolds } from "../hooks/use-holds";
 import { useNowMinute } from "../hooks/use-now-minute";
 import { DayAgenda } from "./day-agenda";
 import { DayDialogs, type OpenDialog } from "./day-dialogs";
 import { DayGrid } from "./day-grid";
 import { DaySheet } from "./day-sheet";
 import { DayTitle } from "./day-title";
+import { DeskVerbs } from "./desk-verbs";
 import { DiaryFoot } from "./diary-foot";
+import { HeldWords } from "./held-times";
 
 export interface DayScreenProps {
   first: { filters: DayFilters; day: DiaryDayView };
@@ -50,6 +54,8 @@ export function DayScreen({ first, sites, today, may }: DayScreenProps) {
   const { address, change } = useDayAddress();
   const filters: DayFilters = { day: address.day, siteIds: address.siteIds, by: address.by };
   const day = useDiaryDay(filters, first).data ?? first.day;
+  const siteIds = day.sites.map((site) => site.id);
+  const held = useHolds(siteIds);
   const now = useNowMinute(day.nowMinute);
   const [cursor, setCursor] = useState(() => startCursor(first.day));
   const [dialog, setDialog] = useState<OpenDialog>(null);
@@ -68,6 +74,10 @@ export function DayScreen({ first, sites, today, may }: DayScreenProps) {
     const isTaken = target !== null && target.state !== "cancelled";
     if (isTaken) router.push(`/diary/find?patient=${target.patientId}`);
     else setDialog({ kind: "book", cursor });
+  };
+  const takeUp = (item: PutAsideItem) => {
+    if (item.kind === "finding") router.push(`/diary/find?aside=${item.id}`);
+    else setDialog({ kind: "resume", item });
   };
   useDayKeys({
     target,
@@ -112,6 +122,7 @@ export function DayScreen({ first, sites, today, may }: DayScreenProps) {
             day={day}
             today={today}
             now={now}
+            held={held}
             cursor={cursor}
             onCursor={setCursor}
             chosenId={address.at}
@@ -130,11 +141,20 @@ export function DayScreen({ first, sites, today, may }: DayScreenProps) {
           today={today}
           may={may}
           verbs={verbs}
+          dialog={dialog}
           onDialog={setDialog}
           onClose={close}
         />
       )}
-      <DiaryFoot siteIds={day.sites.map((site) => site.id)} canUndo={may.mark} />
+      <HeldWords day={day} held={held} />
+      <DiaryFoot siteIds={siteIds} canUndo={may.mark}>
+        <DeskVerbs
+          mayBook={may.book}
+          address={writeDayAddress({ ...address, day: undefined, at: null })}
+          day={address.day}
+          onTakeUp={takeUp}
+        />
+      </DiaryFoot>
       <DayDialogs
         dialog={dialog}
         day={day}

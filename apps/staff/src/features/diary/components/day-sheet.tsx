@@ -11,16 +11,18 @@ export interface DaySheetProps {
   today: string;
   may: { book: boolean; mark: boolean; cancel: boolean };
   verbs: ReturnType<typeof useDayVerbs>;
+  dialog: OpenDialog;
   onDialog: (dialog: OpenDialog) => void;
   onClose: () => void;
 }
 
 /** The sheet of the chosen visit, with the day's verbs on it. */
-export function DaySheet({ id, chosen, today, may, verbs, onDialog, onClose }: DaySheetProps) {
+export function DaySheet({ id, chosen, today, may, verbs, dialog, onDialog, onClose }: DaySheetProps) {
   return (
     <AppointmentSheet
       appointmentId={id}
       today={today}
+      isEditing={dialog !== null && "id" in dialog && dialog.id === id}
       onClose={onClose}
       onMove={may.book ? () => onDialog({ kind: "move", id }) : undefined}
       verbs={{

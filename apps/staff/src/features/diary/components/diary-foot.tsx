@@ -1,13 +1,14 @@
 "use client";
 import { Tray } from "@withy/ui/tray";
 import dynamic from "next/dynamic";
-import { useState } from "react";
+import { type ReactNode, useState } from "react";
 import { useSiteChanges } from "../hooks/use-site-changes";
 
 const ChangesSheet = dynamic(() => import("./changes-sheet").then((m) => m.ChangesSheet));
 
 /** The strip at the foot: what was last done at these sites, and the list that it can be undone from. */
-export function DiaryFoot({ siteIds, canUndo }: { siteIds: readonly string[]; canUndo: boolean }) {
+export function DiaryFoot(props: { siteIds: readonly string[]; canUndo: boolean; children?: ReactNode }) {
+  const { siteIds, canUndo, children } = props;
   const [isOpen, setIsOpen] = useState(false);
   const answer = useSiteChanges(siteIds).data;
   const changes = answer ?? [];
@@ -24,6 +25,7 @@ export function DiaryFoot({ siteIds, canUndo }: { siteIds: readonly string[]; ca
         </>
       }
     >
+      {children}
       {isOpen && <ChangesSheet changes={changes} canUndo={canUndo} onClose={() => setIsOpen(false)} />}
     </Tray>
   );

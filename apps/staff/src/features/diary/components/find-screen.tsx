@@ -1,7 +1,7 @@
 "use client";
 import type { AppointmentView, BookingChoicesView, FoundTimeView } from "@withy/contracts/diary";
 import { AlertLine } from "@withy/ui/alert-line";
-import { ButtonLink } from "@withy/ui/button";
+import { Button, ButtonLink } from "@withy/ui/button";
 import type { ComboboxOption } from "@withy/ui/combobox";
 import { EmptyState } from "@withy/ui/empty-state";
 import { Page, PageTitle } from "@withy/ui/page";
@@ -14,6 +14,8 @@ import { problemItems } from "@/api/form-problems";
 import { useShortcut } from "@/components/shortcuts/shortcut-provider";
 import { relaxed, timesQuery, type Wishes } from "../find-wishes";
 import { useFoundTimes } from "../hooks/use-found-times";
+import { usePutAside } from "../hooks/use-put-aside";
+import { asideFinding } from "../put-aside-typed";
 import { addHref } from "../waiting-address";
 import { wantedTime } from "../wanted-time";
 import { FoundDay } from "./found-day";
@@ -26,6 +28,8 @@ export interface FindScreenProps {
   choices: BookingChoicesView;
   start: Wishes;
   startPatient: ComboboxOption | null;
+  /** What these wishes lie in the tray as, where they were taken up from it. */
+  asideId: string | null;
   today: string;
 }
 
@@ -44,7 +48,7 @@ function courseHref(wishes: Wishes, patient: ComboboxOption | null, time: FoundT
 }
 
 /** Why this time and not that one: wishes on the left, times in the middle, the day it lands in on the right. */
-export function FindScreen({ choices, start, startPatient, today }: FindScreenProps) {
+export function FindScreen({ choices, start, startPatient, asideId, today }: FindScreenProps) {
   const router = useRouter();
   const [wishes, setWishes] = useState(start);
   const [patient, setPatient] = useState(startPatient);
@@ -59,6 +63,14 @@ export function FindScreen({ choices, start, startPatient, today }: FindScreenPr
     setChosen(0);
   };
   useShortcut("book", () => chosenTime && setBooking(chosenTime), chosenTime !== undefined);
+  const putAside = usePutAside();
+  const lay = () => {
+    const service = choices.services.find(({ id }) => id === wishes.serviceId);
+    putAside.mutate(asideFinding(wishes, patient, service?.name, asideId), {
+      onSuccess: () => router.push("/diary"),
+    });
+  };
+  useShortcut("put-aside", lay, booking === null);
   const show = (view: AppointmentView) =>
     router.push(`/diary?${new URLSearchParams({ day: view.day, site: view.site.id, at: view.id })}`);
 
@@ -68,9 +80,14 @@ export function FindScreen({ choices, start, startPatient, today }: FindScreenPr
         <PageTitle
           title="Find a time"
           actions={
-            <ButtonLink size="small" as={Link} href={courseHref(wishes, patient, chosenTime)}>
-              As a course
-            </ButtonLink>
+            <>
+              <ButtonLink size="small" as={Link} href={courseHref(wishes, patient, chosenTime)}>
+                As a course
+              </ButtonLink>
+              <Button size="small" shortcut="Ctrl ." busy={putAside.isPending} onClick={lay}>
+                Put aside
+              </Button>
+            </>
           }
         />
         <WishesForm
@@ -84,6 +101,11 @@ export function FindScreen({ choices, start, startPatient, today }: FindScreenPr
         />
       </div>
       <div className="findlist">
+        {putAside.error && (
+          <AlertLine tone="danger" live>
+            {problemItems(putAside.error)[0]?.message}
+          </AlertLine>
+        )}
         {found.error && (
           <AlertLine tone="danger" live>
             {problemItems(found.error)[0]?.message}
@@ -120,6 +142,7 @@ export function FindScreen({ choices, start, startPatient, today }: FindScreenPr
             }),
             patient,
             serviceId: wishes.serviceId,
+            asideId,
           }}
           choices={choices}
           today={today}

@@ -7,9 +7,9 @@ import { givesWayToReason, slotTaken, timeErrors, type WantedTime } from "../wan
  * What booking and moving share: the time being typed, what is wrong with it in the fields' own words, and what a
  * refusal offers. Everything typed stays as it is whatever the server says.
  */
-export function useTimeForm(prefix: string, start: WantedTime, failure: unknown) {
+export function useTimeForm(prefix: string, start: WantedTime, failure: unknown, startReason = "") {
   const [wanted, setWanted] = useState(start);
-  const [reason, setReason] = useState("");
+  const [reason, setReason] = useState(startReason);
   const [attempt, setAttempt] = useState(0);
   const [missing, setMissing] = useState<FieldError[]>([]);
   const toId = (field: string) => (field === "startsAt" ? `${prefix}-day` : `${prefix}-${field}`);
