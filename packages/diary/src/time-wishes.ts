@@ -66,7 +66,8 @@ export interface WishedHours {
 export function wishedHours(wishes: TimeWishes): WishedHours {
   return {
     from: wishes.fromTime === undefined ? 0 : wallMinutes(wishes.fromTime),
-    until: wishes.untilTime === undefined ? 1440 : wallMinutes(wishes.untilTime),
+    // A visit that runs past midnight breaks no wish where none was made.
+    until: wishes.untilTime === undefined ? Number.POSITIVE_INFINITY : wallMinutes(wishes.untilTime),
     parts: wishes.partsOfDay ?? [],
   };
 }
