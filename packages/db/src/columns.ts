@@ -3,6 +3,9 @@ import { bigint, customType, date, datetime, varchar } from "drizzle-orm/mysql-c
 /** MariaDB's own UUID type: 16 bytes, in the order of the text, so version 7 ids stay in time order. */
 export const uuid = customType<{ data: string; driverData: string }>({ dataType: () => "uuid" });
 
+/** The hash of a secret: 32 bytes. */
+export const sha256 = customType<{ data: Buffer; driverData: Buffer }>({ dataType: () => "binary(32)" });
+
 /** An instant in UTC, to the millisecond. */
 export const instant = (name: string) => datetime(name, { mode: "date", fsp: 3 });
 

@@ -5,12 +5,12 @@ import { formatPhone } from "@withy/core/identifiers/phone";
 import { dayOf, timeOf } from "@withy/core/zoned-time";
 import { checkAnswer } from "@withy/diary/offer-standing";
 import type { SystemContext } from "../context";
+import { hashSecretToken } from "../secret-token";
 import { spendTry, type TryLimit } from "../spend-try";
 import { inTransaction } from "../transaction";
 import { acceptOffer, declineOffer } from "./answer-offer";
 import { findLinkedOffer, givenUpBy, type LinkedOffer, standingOf } from "./offer-facts";
 import { lockRound } from "./offer-round";
-import { hashOfferToken } from "./offer-token";
 import { utc } from "./raw-rows";
 import { placeOf } from "./send-offer-message";
 
@@ -19,7 +19,7 @@ const tries: TryLimit = { name: "offer-link", tries: 20, minutes: 15, advice: "a
 
 async function findByToken(ctx: SystemContext, token: string): Promise<LinkedOffer> {
   const offer = offerTokenField.safeParse(token).success
-    ? await findLinkedOffer(ctx, hashOfferToken(token))
+    ? await findLinkedOffer(ctx, hashSecretToken(token))
     : null;
   if (!offer) throw notFound("offer");
   return offer;

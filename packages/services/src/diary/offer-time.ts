@@ -9,10 +9,10 @@ import { recordAudit } from "../audit";
 import type { Context } from "../context";
 import { loadRecord } from "../load-record";
 import { once } from "../once";
+import { hashSecretToken, newSecretToken } from "../secret-token";
 import { verb } from "../verb";
 import { type OfferableTime, readFreedTime } from "./freed-time";
 import { findOpenRound } from "./list-offer-matches";
-import { hashOfferToken, newOfferToken } from "./offer-token";
 import { type Candidate, readWaiting } from "./read-waiting";
 import { sendOffers } from "./send-offer-message";
 
@@ -85,13 +85,13 @@ export const offerTime = verb(
       const { practiceId } = tx;
       const made = people.map(({ entryId }, i) => {
         const offer = { practiceId, id: newId(), roundId: round.id, entryId, rank: i + 1 };
-        return { ...offer, token: newOfferToken() };
+        return { ...offer, token: newSecretToken() };
       });
       const createdAt = tx.clock.now();
       await tx.db
         .insert(waitingOffers)
         .values(
-          made.map(({ token, ...offer }) => ({ ...offer, tokenHash: hashOfferToken(token), createdAt })),
+          made.map(({ token, ...offer }) => ({ ...offer, tokenHash: hashSecretToken(token), createdAt })),
         );
       await sendOffers(tx, round, made);
       await recordAudit(tx, {

@@ -10,10 +10,11 @@ import { loadRecord } from "../load-record";
 import { enqueueMessage } from "../messaging";
 import { once } from "../once";
 import { isConsentWithdrawn } from "../patients/is-consent-withdrawn";
+import { newSecretToken } from "../secret-token";
 import { verb } from "../verb";
 import { auditLetter } from "./letter-audit";
 import { type LetterAtHand, loadLetter, recipientOf } from "./letter-records";
-import { hashLetterToken, linkDays, newLetterToken } from "./letter-token";
+import { hashLetterToken, linkDays } from "./letter-token";
 import { letterView } from "./letter-view";
 
 type Reader = {
@@ -45,7 +46,7 @@ async function sendByEmail(
   reader: Reader & { email: string },
   deliveryId: string,
 ) {
-  const token = newLetterToken();
+  const token = newSecretToken();
   const outboxMessageId = await enqueueMessage(ctx, {
     template: "letter-waiting",
     toAddress: reader.email,

@@ -1,17 +1,7 @@
-import {
-  customType,
-  foreignKey,
-  index,
-  mysqlTable,
-  primaryKey,
-  uniqueIndex,
-  varchar,
-} from "drizzle-orm/mysql-core";
-import { instant, tenantKey, uuid } from "../../columns";
+import { foreignKey, index, mysqlTable, primaryKey, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import { instant, sha256, tenantKey, uuid } from "../../columns";
 import { practices } from "../practices/practices";
 import { staffMembers } from "../practices/staff-members";
-
-const sha256 = customType<{ data: Buffer; driverData: Buffer }>({ dataType: () => "binary(32)" });
 
 /** The secret address of one therapist's calendar feed. Only the token's hash is kept. */
 export const calendarFeeds = mysqlTable(

@@ -1,5 +1,4 @@
 import {
-  customType,
   foreignKey,
   index,
   int,
@@ -9,15 +8,13 @@ import {
   uniqueIndex,
   varchar,
 } from "drizzle-orm/mysql-core";
-import { instant, tenantKey, uuid } from "../../columns";
+import { instant, sha256, tenantKey, uuid } from "../../columns";
 import { patients } from "../patients/patients";
 import { rooms } from "../practices/rooms";
 import { sites } from "../practices/sites";
 import { staffMembers } from "../practices/staff-members";
 import { appointments } from "./appointments";
 import { services } from "./services";
-
-const sha256 = customType<{ data: Buffer; driverData: Buffer }>({ dataType: () => "binary(32)" });
 
 /** What someone who waits would take. An absent or empty wish means any. */
 export interface WaitingWishes {
